@@ -1,0 +1,13 @@
+//! deckline checks decks of buoyancy-driven flow before they run.
+//!
+//! A deck is plain text in the language Buoy. It flows one way: text, tree (`syntax`), case (`case`), physics
+//! (`substances`, `physics`), findings (`checks`), a face (`report`, `ide`, `server`, `command`).
+
+pub mod case;
+pub mod checks;
+pub mod physics;
+pub mod quantity;
+pub mod substances;
+pub mod syntax;
+pub mod vocabulary;
+pub mod workspace;

@@ -1,0 +1,3 @@
+//! What a case implies: arrangement, temperatures reached, characteristic numbers, scales, correlations.
+
+pub mod model;

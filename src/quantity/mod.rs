@@ -1,0 +1,3 @@
+//! Quantities.
+pub mod dimension;
+pub use dimension::{Dimension, Exponent};

@@ -1,0 +1,3 @@
+//! Files, includes, practice files, and the pass over a deck from text to findings.
+
+pub mod deck;
