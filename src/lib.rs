@@ -9,5 +9,7 @@ pub mod physics;
 pub mod quantity;
 pub mod substances;
 pub mod syntax;
+#[doc(hidden)]
+pub mod testing;
 pub mod vocabulary;
 pub mod workspace;

@@ -35,6 +35,8 @@ pub enum Variable {
     Pressure,
     /// Mass fraction, in a property.
     Fraction,
+    /// How far a value with a tolerance is from its middle, by the number of the tolerance.
+    Deviation(usize),
     /// A number of a region, in a requirement: its name and the region's.
     RegionNumber(&'static str, Box<str>),
 }

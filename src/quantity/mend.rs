@@ -3,6 +3,10 @@
 //! `Mpa` is mended to `MPa`, `celsius` to `degC`, `W/m2K` to `W/m^2/K`; `W/mK` (watt per millikelvin), where a conductivity
 //! is wanted, to `W/m/K`.
 
+use std::collections::HashMap;
+use std::ops::Range;
+use std::sync::LazyLock;
+
 use crate::quantity::dimension::Dimension;
 use crate::quantity::dimension_names;
 use crate::quantity::prefix::PREFIXES;
@@ -16,12 +20,14 @@ use crate::quantity::unit_table::{self, UNITS};
 const LONGEST_RUN: usize = 16;
 /// Most units run together that are told apart.
 const MOST_RUN_TOGETHER: usize = 4;
+/// Shortest symbol, in characters, that is taken for a misspelling.
+const SHORTEST_MISSPELT: usize = 4;
 /// Most slips mended in one unit.
 const MOST_SLIPS: usize = 8;
 
 /// Spellings that people use and no rule below finds: the slip, in lower case where case
 /// does not matter, and what is meant.
-const SPOKEN: [(&str, &str); 51] = [
+const SPOKEN: [(&str, &str); 53] = [
     ("celsius", "degC"),
     ("centigrade", "degC"),
     ("deg_c", "degC"),
@@ -68,9 +74,11 @@ const SPOKEN: [(&str, &str); 51] = [
     ("ton", "t"),
     ("gm", "g"),
     ("kgs", "kg"),
-    ("psia", "psi"),
-    ("bara", "bar"),
     ("Nm", "N.m"),
+    ("mmwc", "mmH2O"),
+    ("mmwg", "mmH2O"),
+    ("inwc", "inH2O"),
+    ("inwg", "inH2O"),
     ("pct", "%"),
     ("percent", "%"),
 ];
@@ -149,13 +157,13 @@ pub(crate) fn instead_of(symbol: &str, after_quotient: bool) -> Option<String> {
     if let Some((_, meant)) = SPOKEN.iter().find(|(slip, _)| *slip == lowered || *slip == symbol) {
         return Some((*meant).to_string());
     }
-    if let Some(named) = named(&lowered) {
+    if let Some(named) = named(symbol, &lowered) {
         return Some(named);
     }
     if let Some(single) = symbol.strip_suffix('s')
         && single.chars().count() > 1
-        && single != "Pa"
-        && single != "mPa"
+        // mPas is a viscosity, not some pascals.
+        && !single.ends_with("Pa")
         && unit_table::find(single).is_some()
     {
         return Some(single.to_string());
@@ -175,12 +183,35 @@ pub(crate) fn instead_of(symbol: &str, after_quotient: bool) -> Option<String> {
     {
         return Some(parts.join(sign));
     }
-    let near = suggest::nearest(symbol, UNITS.iter().flat_map(|row| row.spellings()));
-    near.map(str::to_string).or(parted.map(|parts| parts.join(sign)))
+    // sec2: a slip with a power behind it.
+    if let Some((head, power)) = symbol.split_at_checked(symbol.len().saturating_sub(1))
+        && power.bytes().all(|byte| byte.is_ascii_digit())
+        && !head.ends_with(|last: char| last.is_ascii_digit())
+    {
+        let meant = unit_table::find(head).map(|_| head.to_string()).or_else(|| instead_of(head, after_quotient));
+        let whole = meant.filter(|meant| unit_table::find(meant).is_some());
+        return whole.map(|meant| format!("{meant}^{power}"));
+    }
+    nearest_unit(symbol)
 }
 
-/// The symbol of a unit named in words: `kilowatts`, `pascal`.
-fn named(lowered: &str) -> Option<String> {
+/// The unit whose name, else whose symbol, is one slip away. Short words are near to everything: for them, none. Two slips
+/// are too many: they make `metre` of `kmetr` and lose the power of ten.
+fn nearest_unit(symbol: &str) -> Option<String> {
+    if symbol.chars().count() < SHORTEST_MISSPELT {
+        return None;
+    }
+    let lowered = symbol.to_lowercase();
+    let one_slip = |known: &&str| strsim::damerau_levenshtein(&lowered, &known.to_lowercase()) <= 1;
+    if let Some(name) = suggest::nearest(symbol, UNITS.iter().map(|row| row.name)).filter(one_slip) {
+        return UNITS.iter().find(|row| row.name == name).map(|row| row.symbol.to_string());
+    }
+    let near = suggest::nearest(symbol, UNITS.iter().flat_map(|row| row.spellings()));
+    near.filter(one_slip).map(str::to_string)
+}
+
+/// The symbol of a unit named in words: `kilowatts`, `pascal`, `kWatt`.
+fn named(symbol: &str, lowered: &str) -> Option<String> {
     let single = lowered.strip_suffix('s').unwrap_or(lowered);
     let symbol_of = |name: &str, prefixed: bool| {
         let mut rows = UNITS.iter().filter(|row| row.takes_prefixes() || !prefixed);
@@ -198,38 +229,38 @@ fn named(lowered: &str) -> Option<String> {
             }
         }
     }
-    None
-}
-
-/// A symbol that differs in case only. The field's usual units come first: `mpa` is `MPa`.
-fn other_case(symbol: &str) -> Option<String> {
-    let usual = dimension_names::KINDS.iter().flat_map(|kind| kind.units).copied();
-    if let Some(found) = same_but_case(symbol, usual) {
-        return Some(found.to_string());
-    }
-    if let Some(found) = same_but_case(symbol, UNITS.iter().flat_map(|row| row.spellings())) {
-        return Some(found.to_string());
-    }
-    let prefixed: Vec<String> = PREFIXES
-        .iter()
-        .filter(|prefix| prefix.common)
-        .flat_map(|prefix| {
-            let rows = UNITS.iter().filter(|row| row.takes_prefixes());
-            rows.map(move |row| format!("{}{}", prefix.symbol, row.symbol))
-        })
-        .filter(|candidate| unit_table::find(candidate).is_some())
-        .collect();
-    same_but_case(symbol, prefixed.iter().map(String::as_str)).map(str::to_string)
-}
-
-/// The candidate that is `symbol` but for case, with the fewest characters changed; ties in alphabetical order.
-fn same_but_case<'a>(symbol: &str, candidates: impl Iterator<Item = &'a str>) -> Option<&'a str> {
-    let lowered = symbol.to_lowercase();
-    candidates.filter(|candidate| candidate.to_lowercase() == lowered).min_by_key(|candidate| {
-        let changed = candidate.chars().zip(symbol.chars()).filter(|(a, b)| a != b).count();
-        (changed, *candidate)
+    PREFIXES.iter().find_map(|prefix| {
+        let rest = prefix.spellings().find_map(|spelling| symbol.strip_prefix(spelling))?;
+        let unit = symbol_of(rest, true).or_else(|| symbol_of(rest.strip_suffix('s')?, true))?;
+        Some(format!("{}{unit}", prefix.symbol))
     })
 }
+
+/// A symbol that differs in case only, with the fewest characters changed. The field's usual units come first: `mpa` is
+/// `MPa`; then every unit; then those with a daily prefix.
+fn other_case(symbol: &str) -> Option<String> {
+    let candidates = BY_LOWER_CASE.get(&symbol.to_lowercase())?;
+    let changed = |other: &str| other.chars().zip(symbol.chars()).filter(|(a, b)| a != b).count();
+    candidates.iter().min_by_key(|(rank, other)| (*rank, changed(other), other)).map(|(_, other)| other.clone())
+}
+
+/// Symbols by their lower case, each with the rank of its group in [`other_case`].
+static BY_LOWER_CASE: LazyLock<HashMap<String, Vec<(usize, String)>>> = LazyLock::new(|| {
+    let mut by_lower_case: HashMap<String, Vec<(usize, String)>> = HashMap::new();
+    let mut add = |rank: usize, symbol: String| {
+        by_lower_case.entry(symbol.to_lowercase()).or_default().push((rank, symbol));
+    };
+    for unit in dimension_names::KINDS.iter().flat_map(|kind| kind.units) {
+        add(0, (*unit).to_string());
+    }
+    for row in UNITS {
+        row.spellings().for_each(|spelling| add(1, spelling.to_string()));
+        for prefix in PREFIXES.iter().filter(|prefix| prefix.common && row.takes(prefix)) {
+            add(2, format!("{}{}", prefix.symbol, row.symbol));
+        }
+    }
+    by_lower_case
+});
 
 /// The units in a run such as `m2K` or `Pas`, each with its power; the fewest units, the longest first.
 fn run_together(symbol: &str) -> Option<Vec<String>> {
@@ -261,7 +292,7 @@ fn parted(symbol: &str, count: usize) -> Option<Vec<String>> {
     })
 }
 
-fn replaced(text: &str, at: std::ops::Range<usize>, meant: &str) -> Option<String> {
+fn replaced(text: &str, at: Range<usize>, meant: &str) -> Option<String> {
     Some(format!("{}{meant}{}", text.get(..at.start)?, text.get(at.end..)?))
 }
 
@@ -290,6 +321,9 @@ mod tests {
             ("kilowatts", "kW"),
             ("KW", "kW"),
             ("kw", "kW"),
+            ("kWatt", "kW"),
+            ("kwatts", "kW"),
+            ("kmetre", "km"),
             ("lbs", "lb"),
             ("bars", "bar"),
             ("BTU", "Btu"),
@@ -311,6 +345,13 @@ mod tests {
             ("Nm", "N.m"),
             ("mmhg", "mmHg"),
             ("MM", "mm"),
+            ("µPas", "µPa.s"),
+            ("m/sec2", "m/s^2"),
+            ("m/Sec2", "m/s^2"),
+            ("degres", "deg"),
+            ("pascel", "Pa"),
+            ("inWC", "inH2O"),
+            ("btu/hr", "Btu/h"),
         ] {
             let found = mended(slip);
             assert_eq!(found.as_deref(), Some(meant), "{slip}");
@@ -321,7 +362,9 @@ mod tests {
     fn a_sound_unit_and_a_hopeless_one_are_left_alone() {
         assert_eq!(mended("W/m^2/K"), None);
         assert_eq!(mended("W/"), None);
-        assert_eq!(mended("qqqqq"), None);
+        for hopeless in ["kmetr", "qqqqq", "mmWQ", "q2", "m/q", "KgQ", "2"] {
+            assert_eq!(mended(hopeless), None, "{hopeless}");
+        }
     }
 
     #[test]

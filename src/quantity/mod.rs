@@ -6,6 +6,7 @@
 pub mod dimension;
 pub mod dimension_names;
 pub mod display;
+mod exponent;
 pub mod mend;
 pub mod prefix;
 pub mod problem;

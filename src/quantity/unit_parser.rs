@@ -11,6 +11,7 @@ use std::ops::Range;
 use num_traits::One;
 
 use crate::quantity::dimension::{Dimension, EXPONENT_LIMIT, Exponent};
+use crate::quantity::exponent::{exponent_of, quotient, superscript};
 use crate::quantity::mend;
 use crate::quantity::problem::UnitProblem;
 use crate::quantity::unit::{Scale, Unit};
@@ -76,6 +77,8 @@ impl Parser<'_> {
             "a unit is written without white space".to_string()
         } else if found.is_ascii_digit() {
             format!("the number {found} has no place here; a power is written as in `m^2` or `m^(1/2)`")
+        } else if matches!(found, '-' | '\u{2212}' | '×') {
+            "a product is written with `.`, as in `Pa.s`, and a negative power as in `s^-1`".to_string()
         } else if found == '^' {
             "one power only: write `m^(1/2)` for a broken one".to_string()
         } else {
@@ -261,59 +264,9 @@ fn raised(factor: f64, exponent: Exponent) -> f64 {
     }
 }
 
-/// `-2`, `+3` or `0.5` as an exact rational; `None` where it is none, or beyond [`EXPONENT_LIMIT`].
-fn exponent_of(written: &str) -> Option<Exponent> {
-    let (sign, digits) = match written.strip_prefix('-') {
-        Some(rest) => (-1, rest),
-        None => (1, written.strip_prefix('+').unwrap_or(written)),
-    };
-    let (whole, decimals) = digits.split_once('.').unwrap_or((digits, ""));
-    let decimals = decimals.trim_end_matches('0');
-    let all_digits = |text: &str| text.bytes().all(|byte| byte.is_ascii_digit());
-    if whole.is_empty() || decimals.len() > 3 || !all_digits(whole) || !all_digits(decimals) {
-        return None;
-    }
-    let denominator = 10_i32.checked_pow(u32::try_from(decimals.len()).ok()?)?;
-    let fraction: i32 = if decimals.is_empty() { 0 } else { decimals.parse().ok()? };
-    let whole: i32 = whole.parse().ok()?;
-    let numerator = whole.checked_mul(denominator)?.checked_add(fraction)?;
-    bounded(Exponent::new(sign * numerator, denominator))
-}
-
-fn quotient(above: Exponent, below: Exponent) -> Option<Exponent> {
-    if *below.numer() == 0 {
-        return None;
-    }
-    // Both are within the limit of 1000, so the products stay within 32 bits.
-    bounded(above / below)
-}
-
-fn bounded(exponent: Exponent) -> Option<Exponent> {
-    let within = |value: i32| (-EXPONENT_LIMIT..=EXPONENT_LIMIT).contains(&value);
-    (within(*exponent.numer()) && within(*exponent.denom())).then_some(exponent)
-}
-
-fn superscript(found: char) -> Option<char> {
-    Some(match found {
-        '⁰' => '0',
-        '¹' => '1',
-        '²' => '2',
-        '³' => '3',
-        '⁴' => '4',
-        '⁵' => '5',
-        '⁶' => '6',
-        '⁷' => '7',
-        '⁸' => '8',
-        '⁹' => '9',
-        '⁻' => '-',
-        '⁺' => '+',
-        _ => return None,
-    })
-}
-
 /// Whether a unit symbol can begin with this character.
 pub(crate) fn begins_symbol(found: char) -> bool {
-    found.is_alphabetic() || matches!(found, '%' | '°' | '′' | '″' | '\u{b5}')
+    found.is_alphabetic() || matches!(found, '%' | '°' | '′' | '″' | '\u{b5}' | '\u{2103}' | '\u{2109}')
 }
 
 /// How many bytes at the start of `text` belong to one symbol, digits inside it included (`inH2O`, and so `m2` and
@@ -485,10 +438,17 @@ mod tests {
         ];
         let mut dice = Dice(20_260_101);
         let (mut read, mut refused) = (0, 0);
-        for _ in 0..40_000 {
+        let signs = [".", "/", "*", "·", "^2.", "⁻¹/"];
+        let symbols = ["m", "kg", "W", "degC", "inH2O", "µPa", "(K)", "(m/s)^2", "Ω^(1/2)", "ft^-1", "bar"];
+        for _ in 0..15_000 {
             let mut text = String::new();
-            for _ in 0..=dice.below(12) {
-                if dice.below(4) == 0 {
+            // Every other text has the shape of a unit, so that sound ones come up often.
+            let shaped = dice.below(2) == 0;
+            for at in 0..=dice.below(8) {
+                if shaped {
+                    text.push_str(if at == 0 { "" } else { signs[dice.below(signs.len())] });
+                    text.push_str(symbols[dice.below(symbols.len())]);
+                } else if dice.below(4) == 0 {
                     text.extend(char::from_u32(dice.below(0x3100) as u32));
                 } else {
                     text.push_str(pieces[dice.below(pieces.len())]);

@@ -67,16 +67,21 @@ impl<'a> Medium<'a> {
         Some(Medium { substance, fraction: fluid.fraction.as_ref().map_or(0.0, |value| value.si) })
     }
 
-    /// All properties at `temperature` (K) and `pressure` (Pa). `None` outside the range of the data or where the
-    /// substance lacks one. A property that has no value there is `NaN`.
+    /// All properties at `temperature` (K) and `pressure` (Pa). `None` outside the range of the data and where
+    /// the substance has no density there. A property that has no value there is `NaN`.
     pub fn properties(&self, temperature: f64, pressure: f64) -> Option<Properties> {
         if !self.holds_at(temperature) || !pressure.is_finite() || pressure <= 0.0 {
             return None;
         }
         let at = At { temperature, pressure };
         let substance = self.substance;
+        // Without a density there is no such phase here, and no other property means anything.
+        let density = self.value(substance.density.as_ref()?, Quantity::Density, at);
+        if !density.is_finite() {
+            return None;
+        }
         Some(Properties {
-            density: self.value(substance.density.as_ref()?, Quantity::Density, at),
+            density,
             heat_capacity: self.optional(&substance.heat_capacity, Quantity::HeatCapacity, at),
             viscosity: self.optional(&substance.viscosity, Quantity::Viscosity, at),
             conductivity: self.optional(&substance.conductivity, Quantity::Conductivity, at),
@@ -183,7 +188,7 @@ impl<'a> Medium<'a> {
             Variable::Local(index) => {
                 self.substance.locals.get(*index).map_or(f64::NAN, |local| self.evaluate(local, at))
             }
-            Variable::Given(_) | Variable::RegionNumber(..) => f64::NAN,
+            Variable::Given(_) | Variable::Deviation(_) | Variable::RegionNumber(..) => f64::NAN,
         })
     }
 }

@@ -161,8 +161,7 @@ fn phrase(node: Node<'_>, offset: usize) -> Phrase {
 
 fn arguments(node: Node<'_>, offset: usize) -> Vec<Expression> {
     node.into_inner()
-        .filter(|part| part.as_rule() == Rule::argument)
-        .filter_map(|part| part.into_inner().next())
+        .filter(|part| matches!(part.as_rule(), Rule::date | Rule::text | Rule::expression))
         .map(|part| expression(part, offset))
         .collect()
 }

@@ -87,6 +87,7 @@ pub const PROPERTY_FORMS: &[Choice] = &[
     choice("iapws-if97", "IAPWS-IF97, region 1: liquid water"),
     choice("iapws-if97-steam", "IAPWS-IF97, region 2: steam"),
     choice("iapws-viscosity", "IAPWS R12-08: viscosity of water and steam"),
+    choice("iapws-melting", "IAPWS R14-08: where ice melts"),
     choice("iapws-conductivity", "IAPWS R15-11: thermal conductivity of water and steam"),
 ];
 

@@ -240,7 +240,10 @@ pub const STATEMENTS: &[StatementRow] = &[
     row(
         "freezes",
         &[In::Substance],
-        &[slot("at", "temperature", Takes::PropertyForm(TEMPERATURE), REQUIRED)],
+        &[
+            slot("at", "temperature", Takes::PropertyForm(TEMPERATURE), OPTIONAL),
+            slot("by", "form", Takes::Choice(offer::PROPERTY_FORMS), OPTIONAL),
+        ],
         ONCE,
         "The freezing temperature, which may depend on `p` and `x`.",
         "freezes at 0 degC",

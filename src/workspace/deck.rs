@@ -1,5 +1,6 @@
 //! A deck with everything that is known of it.
 
+use crate::case::Resolution;
 use crate::case::model::Case;
 use crate::physics::model::Physics;
 use crate::syntax::tree::Tree;
@@ -23,6 +24,8 @@ pub struct SourceFile {
 pub struct Deck {
     /// The deck itself, its includes in the order met, and the practice file. [`FileId`] counts in this list.
     pub files: Vec<Arc<SourceFile>>,
+    /// Everything that does not depend on the point of a sweep.
+    pub resolution: Resolution,
     /// The case; at the first point of a sweep.
     pub case: Case,
     /// Its physics.

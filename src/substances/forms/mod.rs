@@ -19,6 +19,7 @@ pub fn code(form: &str, quantity: Quantity, temperature: f64, pressure: f64) -> 
         "iapws-if97" if quantity == Quantity::Boiling => {
             return iapws_if97::saturation_temperature(pressure).unwrap_or(f64::NAN);
         }
+        "iapws-melting" => return iapws_melting::melting_temperature(pressure).unwrap_or(f64::NAN),
         "iapws-if97" => iapws_if97::liquid(temperature, pressure),
         "iapws-if97-steam" => iapws_if97_steam::steam(temperature, pressure),
         // Viscosity and conductivity are functions of density, which the region of the state decides.

@@ -1,0 +1,91 @@
+//! Helps tests: decks with marks of what must be found in them.
+//!
+//! A mark is a comment at the end of a line: `#! check-name`, several with commas, each with a part of the message in
+//! quotes where it matters: `#! density-span "0.148", no-initial`.
+
+use crate::syntax::{Finding, Level};
+use crate::workspace::{Deck, analyse_text};
+
+/// The day that tests count from.
+pub const TODAY: &str = "2026-12-01";
+
+/// What is found in a text.
+pub fn findings(text: &str) -> Vec<Finding> {
+    analyse_text(text, TODAY).findings
+}
+
+/// A mark: the line (from 1), the check, and a part of the message.
+#[derive(Clone, Debug, PartialEq, Eq)]
+pub struct Mark {
+    /// Line, from 1.
+    pub line: usize,
+    /// Check.
+    pub check: String,
+    /// Part of the message; empty for any.
+    pub part: String,
+}
+
+/// The marks in a text.
+pub fn marks(text: &str) -> Vec<Mark> {
+    let mut marks = Vec::new();
+    for (index, line) in text.lines().enumerate() {
+        let Some((_, behind)) = line.split_once("#! ") else { continue };
+        let mut rest = behind.trim();
+        while !rest.is_empty() {
+            let end = rest.find([' ', ',']).unwrap_or(rest.len());
+            let (check, after) = rest.split_at(end);
+            let mut part = "";
+            rest = after.trim_start();
+            if let Some(quoted) = rest.strip_prefix('"')
+                && let Some((inside, after)) = quoted.split_once('"')
+            {
+                part = inside;
+                rest = after.trim_start();
+            }
+            rest = rest.trim_start_matches(',').trim_start();
+            marks.push(Mark { line: index + 1, check: check.to_string(), part: part.to_string() });
+        }
+    }
+    marks
+}
+
+/// What differs between a deck's findings (of level information and above, waived ones left out) and its marks, as lines;
+/// empty where they agree.
+pub fn differences(deck: &Deck) -> Vec<String> {
+    let Some(file) = deck.files.first() else { return vec!["no file".into()] };
+    let text = &file.text;
+    let line_of = |offset: usize| text.get(..offset).map_or(0, |before| before.matches('\n').count() + 1);
+    let mut wanted = marks(text);
+    let mut wrong = Vec::new();
+    for finding in &deck.findings {
+        if finding.place.file.0 != 0 || finding.waived.is_some() {
+            continue;
+        }
+        let line = line_of(finding.place.span.start);
+        let is_met =
+            |mark: &Mark| mark.line == line && mark.check == finding.check && finding.message.contains(&mark.part);
+        match wanted.iter().position(is_met) {
+            Some(index) => {
+                wanted.remove(index);
+            }
+            None if finding.level >= Level::Information => {
+                wrong.push(format!(
+                    "not marked: line {line}: {} ({}): {}",
+                    finding.check,
+                    finding.level.word(),
+                    finding.message
+                ));
+            }
+            None => {}
+        }
+    }
+    wrong.extend(wanted.iter().map(|mark| format!("not found: line {}: {} \"{}\"", mark.line, mark.check, mark.part)));
+    wrong
+}
+
+/// Fails where a text's findings and marks differ.
+#[track_caller]
+pub fn expect(text: &str) {
+    let wrong = differences(&analyse_text(text, TODAY));
+    assert!(wrong.is_empty(), "\n{}\n", wrong.join("\n"));
+}
