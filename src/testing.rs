@@ -3,8 +3,13 @@
 //! A mark is a comment at the end of a line: `#! check-name`, several with commas, each with a part of the message in
 //! quotes where it matters: `#! density-span "0.148", no-initial`.
 
-use crate::syntax::{Finding, Level};
-use crate::workspace::{Deck, analyse_text};
+use crate::syntax::{Finding, Level, parse};
+use crate::workspace::analyse::{analyse_text, resolved_text};
+use crate::workspace::includes::{load, normalised};
+use crate::workspace::{Deck, Problem, Read, SourceFile};
+use std::collections::BTreeMap;
+use std::path::{Path, PathBuf};
+use std::sync::Arc;
 
 /// The day that tests count from.
 pub const TODAY: &str = "2026-12-01";
@@ -81,6 +86,68 @@ pub fn differences(deck: &Deck) -> Vec<String> {
     }
     wrong.extend(wanted.iter().map(|mark| format!("not found: line {}: {} \"{}\"", mark.line, mark.check, mark.part)));
     wrong
+}
+
+/// Files in memory.
+#[derive(Debug, Default)]
+pub struct MemoryFiles {
+    /// Text by path.
+    pub files: BTreeMap<PathBuf, String>,
+}
+
+impl Read for MemoryFiles {
+    fn read(&self, path: &Path) -> Result<Arc<SourceFile>, Problem> {
+        match self.files.get(path) {
+            Some(text) => Ok(Arc::new(SourceFile { path: path.into(), tree: parse(text), text: text.as_str().into() })),
+            None => Err(Problem { path: path.into(), message: "no such file".into() }),
+        }
+    }
+
+    fn exists(&self, path: &Path) -> bool {
+        self.files.contains_key(path)
+    }
+
+    fn real_path(&self, path: &Path) -> Option<PathBuf> {
+        Some(normalised(path))
+    }
+}
+
+/// Fails where what loading the first of these files finds differs from the marks in all of them. The project folder is
+/// `/project`.
+#[track_caller]
+pub fn expect_files(files: &[(&str, &str)]) {
+    let memory =
+        MemoryFiles { files: files.iter().map(|(path, text)| (PathBuf::from(path), (*text).to_string())).collect() };
+    let Some(Ok(deck)) = files.first().map(|(path, _)| memory.read(Path::new(path))) else { return };
+    let loaded = load(&memory, deck, Path::new("/project"));
+    let mut found: Vec<(String, usize, &str)> = loaded
+        .findings
+        .iter()
+        .filter_map(|finding| {
+            let file = loaded.files.get(finding.place.file.0 as usize)?;
+            let line = file.text.get(..finding.place.span.start)?.matches('\n').count() + 1;
+            Some((file.path.display().to_string(), line, finding.check))
+        })
+        .collect();
+    let marked: Vec<(String, Mark)> =
+        files.iter().flat_map(|(path, text)| marks(text).into_iter().map(|mark| ((*path).to_string(), mark))).collect();
+    let mut wanted: Vec<(String, usize, &str)> =
+        marked.iter().map(|(path, mark)| (path.clone(), mark.line, mark.check.as_str())).collect();
+    found.sort();
+    wanted.sort();
+    assert_eq!(found, wanted);
+    for (_, mark) in &marked {
+        assert!(
+            loaded.findings.iter().any(|finding| finding.check == mark.check && finding.message.contains(&mark.part))
+        );
+    }
+}
+
+/// Fails where what reading and resolving a text finds differs from its marks; no check of the physics runs.
+#[track_caller]
+pub fn expect_reading(text: &str) {
+    let wrong = differences(&resolved_text(text));
+    assert!(wrong.is_empty(), "\n{}\n", wrong.join("\n"));
 }
 
 /// Fails where a text's findings and marks differ.

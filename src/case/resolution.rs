@@ -552,15 +552,22 @@ fn unsettled_kinds(worker: &mut Worker<'_, '_>, resolution: &Resolution) {
 fn unused_names(worker: &mut Worker<'_, '_>) {
     let used: HashSet<Place> = worker.references.iter().map(|reference| reference.target).collect();
     let mut unused: Vec<(Place, String)> = Vec::new();
-    for value in &worker.names.values {
-        if value.kind != ValueKind::Member && value.place.file == FileId(0) && !used.contains(&value.place) {
+    for (number, value) in worker.names.values.iter().enumerate() {
+        // A circular one has a finding of its own.
+        let is_circular = value.expression.is_some() && worker.typed.get(number).is_none_or(Option::is_none);
+        if value.kind != ValueKind::Member
+            && value.place.file == FileId(0)
+            && !used.contains(&value.place)
+            && !is_circular
+        {
             unused.push((value.place, value.name.clone()));
         }
     }
-    for entry in worker.entries {
-        let is_used_by_name =
-            matches!(declare::named_kind(entry.row.kind), Some(NameOf::Fluid | NameOf::Solid | NameOf::Substance));
-        if let (true, FileId(0), Some((name, place))) = (is_used_by_name, entry.file, entry.name())
+    for (index, entry) in worker.entries.iter().enumerate() {
+        let kind = declare::named_kind(entry.row.kind)
+            .filter(|kind| matches!(kind, NameOf::Fluid | NameOf::Solid | NameOf::Substance));
+        if let (Some(kind), FileId(0), Some((name, place))) = (kind, entry.file, entry.name())
+            && worker.names.entity(kind, name) == Some(index)
             && !used.contains(&place)
         {
             unused.push((place, name.to_string()));

@@ -1,6 +1,36 @@
 //! The list of the checks. Adding one is a file and a line here.
 
 use super::check::Check;
+use super::*;
 
 /// Every check, by family.
-pub const CHECKS: &[&Check] = &[];
+pub static CHECKS: &[&Check] = &[
+    // writing
+    &writing::unreadable_line::CHECK,
+    &writing::line_too_complex::CHECK,
+    &writing::unknown_word::CHECK,
+    &writing::misplaced_statement::CHECK,
+    &writing::missing_statement::CHECK,
+    &writing::repeated_statement::CHECK,
+    &writing::missing_argument::CHECK,
+    &writing::unexpected_argument::CHECK,
+    &writing::unknown_name::CHECK,
+    &writing::repeated_name::CHECK,
+    &writing::unused_name::CHECK,
+    &writing::circular_definition::CHECK,
+    &writing::no_finite_value::CHECK,
+    &writing::sweep_without_end::CHECK,
+    &writing::sweep_unpaired::CHECK,
+    &writing::sweep_too_large::CHECK,
+    &writing::include_not_found::CHECK,
+    &writing::include_circular::CHECK,
+    &writing::include_outside::CHECK,
+    &writing::include_too_deep::CHECK,
+    // units
+    &units::dimension_mismatch::CHECK,
+    &units::unknown_unit::CHECK,
+    &units::bare_number::CHECK,
+    &units::temperature_kind::CHECK,
+    &units::unit_spacing::CHECK,
+    &units::gauge_or_absolute::CHECK,
+];

@@ -2,6 +2,8 @@
 
 pub mod check;
 pub mod list;
+pub mod units;
+pub mod writing;
 
 use crate::case::model::{Case, Practice};
 use crate::physics::model::Physics;

@@ -5,9 +5,10 @@ use super::includes::{Loaded, load};
 use super::practice::{practice_file, project_folder};
 use super::read::{Problem, Read};
 use super::sweep;
-use crate::case::model::Practice;
+use crate::case::model::Case;
 use crate::case::{Known, Role, Source, resolve};
 use crate::checks;
+use crate::physics::model::Physics;
 use crate::substances::library::NAMES;
 use crate::syntax::{FileId, Finding, parse};
 use std::path::{Path, PathBuf};
@@ -43,11 +44,20 @@ pub fn analyse(reader: &dyn Read, path: &Path, options: &Options) -> Result<Deck
 
 /// Everything about a deck that is a text alone.
 pub fn analyse_text(text: &str, today: &str) -> Deck {
-    let file = Arc::new(SourceFile { path: PathBuf::from("deck.buoy"), tree: parse(text), text: text.into() });
-    from_files(Loaded { files: vec![file], findings: Vec::new() }, None, false, today)
+    from_files(only(text), None, false, today)
 }
 
-fn from_files(loaded: Loaded, practice: Option<Arc<SourceFile>>, is_practice: bool, today: &str) -> Deck {
+/// A deck that is a text alone, resolved and no further: its findings are those of reading.
+pub fn resolved_text(text: &str) -> Deck {
+    resolved(only(text), None, false)
+}
+
+fn only(text: &str) -> Loaded {
+    let file = Arc::new(SourceFile { path: PathBuf::from("deck.buoy"), tree: parse(text), text: text.into() });
+    Loaded { files: vec![file], findings: Vec::new() }
+}
+
+fn resolved(loaded: Loaded, practice: Option<Arc<SourceFile>>, is_practice: bool) -> Deck {
     let Loaded { mut files, mut findings } = loaded;
     let deck_files = files.len();
     files.extend(practice);
@@ -64,26 +74,25 @@ fn from_files(loaded: Loaded, practice: Option<Arc<SourceFile>>, is_practice: bo
     let check_names: Vec<&str> = checks::CHECKS.iter().map(|check| check.name).collect();
     let mut resolution = resolve(&sources, Known { substances: &NAMES, checks: &check_names });
     findings.append(&mut resolution.findings);
+    Deck { files, resolution, case: Case::default(), physics: Physics::default(), findings }
+}
+
+fn from_files(loaded: Loaded, practice: Option<Arc<SourceFile>>, is_practice: bool, today: &str) -> Deck {
+    let mut deck = resolved(loaded, practice, is_practice);
     let today = if today.is_empty() { clock_today() } else { today.to_string() };
-    let mut deck = Deck {
-        files,
-        resolution,
-        case: crate::case::model::Case::default(),
-        physics: crate::physics::model::Physics::default(),
-        findings: Vec::new(),
-    };
+    let mut findings = std::mem::take(&mut deck.findings);
     if is_practice {
         deck.case.practice = deck.resolution.case(&deck.resolution.nominal).practice;
     } else {
         findings.append(&mut sweep::over_all_points(&mut deck, &today));
     }
-    deck.findings = finish(findings, &deck.case.practice, &deck, &today);
+    deck.findings = finish(findings, &deck, &today);
     deck
 }
 
 /// Levels by practice, waivers, and the order of places.
-fn finish(findings: Vec<Finding>, practice: &Practice, deck: &Deck, today: &str) -> Vec<Finding> {
-    let findings = checks::at_practice_level(findings, practice);
+fn finish(findings: Vec<Finding>, deck: &Deck, today: &str) -> Vec<Finding> {
+    let findings = checks::at_practice_level(findings, &deck.case.practice);
     let mut findings = checks::apply_waivers(&deck.case, findings, today);
     findings.sort_by(|a, b| {
         (a.place, std::cmp::Reverse(a.level), a.check, &a.message).cmp(&(
