@@ -11,11 +11,11 @@ use super::names::{self, NamedValue, ValueKind};
 use super::sweep::{self, Sweep};
 use crate::case::{Role, Source};
 use crate::quantity::{Dimension, Scale, parse_unit};
-use crate::syntax::tree::{Comparison, Expression, ExpressionKind};
+use crate::syntax::tree::{Comparison, Content, Definition, Entry, Expression, ExpressionKind};
 use crate::syntax::{FileId, Finding, Level, Place, Span};
 use crate::vocabulary::statements::TEMPERATURE;
 use crate::vocabulary::{EntryKind, NameOf};
-use std::collections::HashSet;
+use std::collections::{HashMap, HashSet};
 
 /// A deck resolved: names, bound statements, the sweep, and what was found on the way.
 #[derive(Debug, Default)]
@@ -199,8 +199,7 @@ fn work_out_values<'t>(worker: &mut Worker<'_, 't>, resolution: &mut Resolution)
         if kind == ValueKind::Varied {
             let worked: Vec<Typed> =
                 sweep::parts(expression).into_iter().map(|part| worker.work(part, base, Scope::Deck)).collect();
-            let nominal = with_deviations(&resolution.nominal, worker.tolerances.len());
-            let evaluate = |typed: &Typed| nominal.evaluate(&typed.compiled);
+            let evaluate = |typed: &Typed| resolution.nominal.evaluate(&typed.compiled);
             let (values, typed) = sweep::run_over(worker, expression, base.place(expression.span), &worked, &evaluate);
             set(&mut resolution.nominal.values, number, values.first().copied().unwrap_or(f64::NAN));
             set(&mut varies, number, true);
@@ -209,9 +208,8 @@ fn work_out_values<'t>(worker: &mut Worker<'_, 't>, resolution: &mut Resolution)
             continue;
         }
         let typed = worker.work(expression, base, Scope::Deck);
-        let nominal = with_deviations(&resolution.nominal, worker.tolerances.len());
-        let result = nominal.evaluate(&typed.compiled);
-        no_finite_value(worker, &typed, result, &nominal, base.place(expression.span));
+        let result = resolution.nominal.evaluate(&typed.compiled);
+        no_finite_value(worker, &typed, result, &resolution.nominal, base.place(expression.span));
         set(&mut resolution.nominal.values, number, result);
         set(&mut resolution.values, number, Some(typed.compiled.clone()));
         set(&mut worker.typed, number, Some(typed));
@@ -230,10 +228,6 @@ fn set<T>(list: &mut [T], index: usize, value: T) {
     if let Some(slot) = list.get_mut(index) {
         *slot = value;
     }
-}
-
-fn with_deviations(point: &Point, count: usize) -> Point {
-    Point { values: point.values.clone(), deviations: vec![0.0; count] }
 }
 
 /// The ambient pressure is a value that gauge pressures refer to.
@@ -484,24 +478,33 @@ fn written_at(place: Place, sources: &[Source<'_>]) -> String {
     text.unwrap_or("").to_string()
 }
 
+/// The line of every definition and sweep, by the place of its name.
+fn lines_of_names<'t>(entries: &[DeclaredEntry<'t>]) -> HashMap<Place, (&'t Entry, usize)> {
+    let mut lines = HashMap::new();
+    for declared in entries.iter().filter(|entry| matches!(entry.row.kind, EntryKind::Given | EntryKind::Vary)) {
+        for (index, line) in declared.entry.lines.iter().enumerate() {
+            let name = match &line.content {
+                Content::Definition(definition) => definition.name.span,
+                Content::Phrase(phrase) => phrase.word.span,
+                _ => continue,
+            };
+            lines.insert(declared.place(name), (declared.entry, index));
+        }
+    }
+    lines
+}
+
 fn describe_values(worker: &Worker<'_, '_>, resolution: &mut Resolution) {
+    let lines = lines_of_names(worker.entries);
     for (number, value) in worker.names.values.iter().enumerate() {
         if value.kind == ValueKind::Member {
             continue;
         }
         let typed = worker.typed.get(number).and_then(Option::as_ref);
         let entry = worker.entries.get(value.entry);
-        let described = entry.and_then(|entry| {
-            let index = entry
-                .entry
-                .lines
-                .iter()
-                .position(|line| line.span.shifted(entry.offset).touches(value.place.span.start))?;
-            let definition =
-                entry.definitions.iter().find(|definition| entry.place(definition.name.span) == value.place);
-            let behind =
-                definition.and_then(|definition| definition.description.as_ref()).map(|text| text.text.to_string());
-            behind.or_else(|| entry.entry.description_above(index))
+        let described = lines.get(&value.place).and_then(|(entry, index)| match &entry.lines.get(*index)?.content {
+            Content::Definition(Definition { description: Some(text), .. }) => Some(text.text.to_string()),
+            _ => entry.description_above(*index),
         });
         let place = match (entry, value.expression) {
             (Some(entry), Some(expression)) => entry.place(expression.span),
