@@ -7,7 +7,17 @@ use std::path::{Path, PathBuf};
 
 /// The rooms from top to bottom. A room imports from rooms below it only.
 const ROOMS: [&str; 12] = [
-    "command", "server", "ide", "report", "workspace", "checks", "physics", "substances", "case", "vocabulary", "syntax",
+    "command",
+    "server",
+    "ide",
+    "report",
+    "workspace",
+    "checks",
+    "physics",
+    "substances",
+    "case",
+    "vocabulary",
+    "syntax",
     "quantity",
 ];
 
@@ -16,7 +26,8 @@ fn source() -> PathBuf {
 }
 
 fn rust_files(folder: &Path, into: &mut Vec<PathBuf>) {
-    let mut entries: Vec<PathBuf> = fs::read_dir(folder).expect("a folder").map(|entry| entry.expect("an entry").path()).collect();
+    let mut entries: Vec<PathBuf> =
+        fs::read_dir(folder).expect("a folder").map(|entry| entry.expect("an entry").path()).collect();
     entries.sort();
     for path in entries {
         if path.is_dir() {
@@ -80,7 +91,9 @@ fn only_the_upper_rooms_do_input_and_output() {
     let mut wrong = Vec::new();
     for room in ["checks", "physics", "substances", "case", "vocabulary", "syntax", "quantity", "ide"] {
         for (path, text) in &files_by_room()[room] {
-            for forbidden in ["std::fs", "std::net", "std::process", "std::env::", "println!", "eprintln!", "SystemTime"] {
+            for forbidden in
+                ["std::fs", "std::net", "std::process", "std::env::", "println!", "eprintln!", "SystemTime"]
+            {
                 if text.contains(forbidden) {
                     wrong.push(format!("{} uses {forbidden}", path.display()));
                 }

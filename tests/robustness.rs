@@ -41,9 +41,46 @@ fn together(text: &str) -> String {
 }
 
 const PIECES: [&str; 40] = [
-    "(", ")", "[", "]", "\"", "#", "|", "=", "<", "..", " ", "\t", "\n", "\r\n", "    ", "+-", "-", "*", "/", "^", "1e999", "0",
-    "degC", "K", "m/s^2", "barg", "by", "of", "within", "region a", "\nboundary b of a", "\u{feff}", "é", "🌡", "α", "\u{301}",
-    "²", "T", "9999999999999999999999", "difference",
+    "(",
+    ")",
+    "[",
+    "]",
+    "\"",
+    "#",
+    "|",
+    "=",
+    "<",
+    "..",
+    " ",
+    "\t",
+    "\n",
+    "\r\n",
+    "    ",
+    "+-",
+    "-",
+    "*",
+    "/",
+    "^",
+    "1e999",
+    "0",
+    "degC",
+    "K",
+    "m/s^2",
+    "barg",
+    "by",
+    "of",
+    "within",
+    "region a",
+    "\nboundary b of a",
+    "\u{feff}",
+    "é",
+    "🌡",
+    "α",
+    "\u{301}",
+    "²",
+    "T",
+    "9999999999999999999999",
+    "difference",
 ];
 
 #[test]
@@ -77,7 +114,10 @@ fn mangled_decks_are_read_to_the_end_and_lose_nothing() {
         for finding in &deck.findings {
             let span = finding.place.span;
             assert!(text.get(span.start..span.end).is_some(), "round {round}: {finding:?}");
-            assert!(!finding.message.contains("NaN") && !finding.message.contains("inf "), "round {round}: {finding:?}");
+            assert!(
+                !finding.message.contains("NaN") && !finding.message.contains("inf "),
+                "round {round}: {finding:?}"
+            );
             for edit in finding.fixes.iter().flat_map(|fix| &fix.edits) {
                 assert!(text.get(edit.span.start..edit.span.end).is_some(), "round {round}: {finding:?}");
             }
@@ -125,9 +165,10 @@ fn extremes_are_read_in_bounded_time_and_space() {
     let powers = format!("given\n    a = 2{}\n", "^2".repeat(5_000));
     let signs = format!("given\n    a = {}1\n", "-".repeat(20_000));
     let list = format!("vary\n    a over [{}1 s]\n", "1 s, ".repeat(3_000));
-    let chain: String =
-        "given\n    v0 = 1 m\n".to_string() + &(1..5_000).map(|n| format!("    v{n} = v{} + 1 m\n", n - 1)).collect::<String>();
-    let circle: String = "given\n".to_string() + &(0..5_000).map(|n| format!("    v{n} = v{}\n", (n + 1) % 5_000)).collect::<String>();
+    let chain: String = "given\n    v0 = 1 m\n".to_string()
+        + &(1..5_000).map(|n| format!("    v{n} = v{} + 1 m\n", n - 1)).collect::<String>();
+    let circle: String =
+        "given\n".to_string() + &(0..5_000).map(|n| format!("    v{n} = v{}\n", (n + 1) % 5_000)).collect::<String>();
     let regions: String = (0..3_000).map(|n| format!("region r{n}\n    box 1 m by 1 m\n")).collect();
     let unclosed = "\"".repeat(30_000);
     let bars = format!("substance s\n    {}\n", "|".repeat(20_000));

@@ -175,6 +175,7 @@ fn add(case: &mut Case, reader: Reader<'_>) {
             first_cell: reader.first("first-cell"),
             growth: reader.first("growth"),
             graded: reader.choice("spacing").map(|(choice, place)| Stated { value: choice == "graded", place }),
+            spacing: reader.first("spacing"),
         }),
         EntryKind::Run if case.run.is_none() => {
             case.run = Some(Run {
@@ -263,14 +264,7 @@ fn region(reader: Reader<'_>) -> Region {
         shape_place: shape.as_ref().map(|(_, place)| *place),
         is_surrounded: surrounded.is_some() || is_plate,
         shape: shape.map(|(shape, _)| shape),
-        axis: reader.choice("axis").map(|(choice, place)| Stated {
-            value: match choice {
-                "x" => Axis::X,
-                "y" => Axis::Y,
-                _ => Axis::Z,
-            },
-            place,
-        }),
+        axis: axis(reader),
         filled_with: reader.name("filled").or(surrounded),
         made_of: reader.name("made"),
         length: reader.first("length"),
@@ -294,6 +288,21 @@ fn region(reader: Reader<'_>) -> Region {
         }),
         viscous_heating: reader.switch("viscous-heating"),
         pressure_work: reader.switch("pressure-work"),
+    }
+}
+
+fn axis(reader: Reader<'_>) -> Option<Stated<Axis>> {
+    let (word, slot) = if reader.statement("cylinder").is_some() { ("cylinder", 2) } else { ("annulus", 3) };
+    match reader.slot(word, slot)? {
+        Bound::Choice(choice, place) => Some(Stated {
+            value: match *choice {
+                "x" => Axis::X,
+                "y" => Axis::Y,
+                _ => Axis::Z,
+            },
+            place: *place,
+        }),
+        _ => None,
     }
 }
 
@@ -390,6 +399,7 @@ fn boundary(reader: Reader<'_>) -> Boundary {
         emissivity: reader.first("emissivity"),
         moves: reader.first("moves").map(|speed| (speed, reader.direction("moves", 1))),
         enters: reader.first("enters"),
+        enters_along: reader.direction("enters", 1),
         carries: reader.first("carries"),
         gauge: reader.first("gauge"),
         backflow: reader.first("backflow"),

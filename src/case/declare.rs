@@ -31,8 +31,8 @@ pub struct DeclaredEntry<'t> {
     pub sweeps: Vec<(&'t Phrase, Option<&'t Expression>)>,
     /// Comparisons.
     pub requirements: Vec<&'t Requirement>,
-    /// Table rows.
-    pub rows: Vec<&'t Row>,
+    /// Table rows, each with the number of the statement that it follows.
+    pub rows: Vec<(Option<usize>, &'t Row)>,
 }
 
 /// A statement of a known word.
@@ -206,7 +206,7 @@ fn declare_line<'t>(declared: &mut DeclaredEntry<'t>, line: &'t Line, findings: 
             }
         },
         Content::Row(row) => match holds {
-            Holds::DefinitionsAndRows => declared.rows.push(row),
+            Holds::DefinitionsAndRows => declared.rows.push((declared.statements.len().checked_sub(1), row)),
             _ => findings.push(misplaced("A table row", declared).remedy("a row below `table` in a substance")),
         },
         Content::Requirement(requirement) => match holds {
@@ -229,6 +229,13 @@ fn declare_phrase<'t>(
     {
         declared.sweeps.push((phrase, over.arguments.first()));
         return;
+    }
+    if let Some(description) = &phrase.description {
+        let at = declared.place(description.span);
+        let message = "A text behind a statement describes it only for a definition and a sweep.";
+        let comment = format!("# {}", description.text);
+        let finding = Finding::new("unexpected-argument", Level::Error, at, message).remedy("a comment");
+        findings.push(finding.fix("Make it a comment", at.span, comment, true));
     }
     match vocabulary::statement_row(kind, &phrase.word.text) {
         Some(row) => {

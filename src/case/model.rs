@@ -407,6 +407,8 @@ pub struct Boundary {
     pub moves: Option<(Value, Option<[f64; 3]>)>,
     /// Speed, volume flow or mass flow in, told apart by dimension.
     pub enters: Option<Value>,
+    /// Direction in which it enters; `None` is straight in.
+    pub enters_along: Option<[f64; 3]>,
     /// Temperature of what enters, K.
     pub carries: Option<Value>,
     /// Pressure above ambient, Pa.
@@ -460,6 +462,8 @@ pub struct Mesh {
     pub growth: Option<Value>,
     /// Whether the cells are graded.
     pub graded: Option<Stated<bool>>,
+    /// Size of cells that are all alike, m.
+    pub spacing: Option<Value>,
 }
 
 /// How the run goes in time.

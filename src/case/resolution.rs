@@ -11,7 +11,7 @@ use super::names::{self, NamedValue, ValueKind};
 use super::sweep::{self, Sweep};
 use crate::case::{Role, Source};
 use crate::quantity::{Dimension, Scale, parse_unit};
-use crate::syntax::tree::{Comparison, Content, Definition, Entry, Expression, ExpressionKind};
+use crate::syntax::tree::{Comparison, Content, Definition, Entry, Expression, ExpressionKind, Phrase};
 use crate::syntax::{FileId, Finding, Level, Place, Span};
 use crate::vocabulary::statements::TEMPERATURE;
 use crate::vocabulary::{EntryKind, NameOf};
@@ -503,7 +503,8 @@ fn describe_values(worker: &Worker<'_, '_>, resolution: &mut Resolution) {
         let typed = worker.typed.get(number).and_then(Option::as_ref);
         let entry = worker.entries.get(value.entry);
         let described = lines.get(&value.place).and_then(|(entry, index)| match &entry.lines.get(*index)?.content {
-            Content::Definition(Definition { description: Some(text), .. }) => Some(text.text.to_string()),
+            Content::Definition(Definition { description: Some(text), .. })
+            | Content::Phrase(Phrase { description: Some(text), .. }) => Some(text.text.to_string()),
             _ => entry.description_above(*index),
         });
         let place = match (entry, value.expression) {
@@ -553,6 +554,11 @@ fn unsettled_kinds(worker: &mut Worker<'_, '_>, resolution: &Resolution) {
 
 /// Names of the deck itself that nothing uses. Included files offer names that a deck need not use.
 fn unused_names(worker: &mut Worker<'_, '_>) {
+    // A file of definitions alone is there for others to include.
+    let is_a_case = |entry: &DeclaredEntry<'_>| matches!(entry.row.kind, EntryKind::Case | EntryKind::Region);
+    if !worker.entries.iter().any(|entry| entry.file == FileId(0) && is_a_case(entry)) {
+        return;
+    }
     let used: HashSet<Place> = worker.references.iter().map(|reference| reference.target).collect();
     let mut unused: Vec<(Place, String)> = Vec::new();
     for (number, value) in worker.names.values.iter().enumerate() {

@@ -2,14 +2,14 @@
 
 use super::bind::{Bound, BoundEntry, base_of};
 use super::compiled::{Compiled, Variable};
-use super::declare::{DeclaredEntry, DeclaredStatement};
+use super::declare::DeclaredEntry;
 use super::expression::{Scope, Typed, Worker, in_words};
 use super::model::{Name, Property, State, Substance};
 use crate::quantity::Dimension;
 use crate::syntax::tree::{Expression, ExpressionKind};
 use crate::syntax::{Finding, Level, Place};
 use crate::vocabulary::Takes;
-use crate::vocabulary::statements::{CONDUCTIVITY, DENSITY, HEAT_CAPACITY, TEMPERATURE, VISCOSITY};
+use crate::vocabulary::statements::{CONDUCTIVITY, DENSITY, EXPANSION, HEAT_CAPACITY, TEMPERATURE, VISCOSITY};
 
 /// Most definitions in a substance. They may refer to one another, and each is evaluated where it is used.
 const LOCALS: usize = 200;
@@ -57,8 +57,8 @@ pub fn substance<'t>(
         _ => None,
     };
     let mut property = |word: &str| {
-        let statement = entry.statements.iter().find(|statement| statement.row.word == word)?;
-        property_of(worker, entry, statement, bound, &locals)
+        let index = entry.statements.iter().position(|statement| statement.row.word == word)?;
+        property_of(worker, entry, index, bound, &locals, evaluate)
     };
     let mut substance = Substance {
         name: bound.name.clone().unwrap_or(Name { text: "".into(), place: bound.head }),
@@ -136,16 +136,18 @@ fn settled(compiled: Compiled, evaluate: &dyn Fn(&Compiled) -> f64) -> Compiled 
 fn property_of<'t>(
     worker: &mut Worker<'_, 't>,
     entry: &DeclaredEntry<'t>,
-    statement: &DeclaredStatement<'t>,
+    index: usize,
     bound: &BoundEntry,
     locals: &[(String, Typed, Place)],
+    evaluate: &dyn Fn(&Compiled) -> f64,
 ) -> Option<Property> {
+    let statement = entry.statements.get(index)?;
     let word = statement.row.word;
-    for (index, slot) in statement.row.slots.iter().enumerate() {
-        match (slot.takes, slot_of(bound, word, index)) {
+    for (number, slot) in statement.row.slots.iter().enumerate() {
+        match (slot.takes, slot_of(bound, word, number)) {
             (Takes::Choice(_), Some(Bound::Choice(form, _))) => return Some(Property::Code(form)),
             (Takes::PropertyForm(dimension), Some(_)) => {
-                let expression: &'t Expression = statement.arguments.get(index)?.first()?;
+                let expression: &'t Expression = statement.arguments.get(number)?.first()?;
                 let typed = worker.work(expression, base_of(entry), Scope::Property(locals));
                 return Some(Property::Expression(hold_dimension(
                     worker,
@@ -158,7 +160,12 @@ fn property_of<'t>(
             _ => {}
         }
     }
-    let message = format!("`{word}` needs a value, an expression or `by` a form.");
+    if entry.rows.iter().any(|(follows, _)| *follows == Some(index)) {
+        let cells = rows_below(worker, entry, index, &["temperature", word], evaluate);
+        return Some(Property::Table(column_of(&cells, 1)));
+    }
+    let message =
+        format!("`{word}` needs a value, an expression, `by` a form, or rows of temperature and value below it.");
     worker.findings.push(Finding::new("missing-argument", Level::Error, statement.place, message));
     None
 }
@@ -180,7 +187,7 @@ fn hold_dimension(worker: &mut Worker<'_, '_>, word: &str, wanted: Dimension, ty
     }
 }
 
-/// The table's columns, for the properties that no statement of their own gives.
+/// What a table of several columns gives, for the properties that no statement of their own gives.
 fn fill_from_table<'t>(
     worker: &mut Worker<'_, 't>,
     entry: &DeclaredEntry<'t>,
@@ -188,19 +195,18 @@ fn fill_from_table<'t>(
     substance: &mut Substance,
     evaluate: &dyn Fn(&Compiled) -> f64,
 ) {
-    let Some(table) = bound.statements.iter().find(|statement| statement.row.word == "table") else {
-        if let Some(row) = entry.rows.first() {
-            let finding = Finding::new(
-                "misplaced-statement",
-                Level::Error,
-                entry.place(row.span),
-                "No `table` names the columns of this row.",
-            );
-            worker.findings.push(finding.remedy("`table temperature, density, viscosity` above the rows"));
+    for (follows, row) in &entry.rows {
+        let is_below_nothing = follows.and_then(|index| entry.statements.get(index)).is_none_or(|statement| {
+            statement.row.word != "table" && statement.arguments.iter().any(|list| !list.is_empty())
+        });
+        if is_below_nothing {
+            let message = "This row follows neither `table` nor a property without a value, such as `viscosity`.";
+            worker.findings.push(Finding::new("misplaced-statement", Level::Error, entry.place(row.span), message));
         }
-        return;
-    };
-    let columns: Vec<&str> =
+    }
+    let Some(index) = entry.statements.iter().position(|statement| statement.row.word == "table") else { return };
+    let Some(table) = bound.statements.get(index) else { return };
+    let columns: Vec<&'static str> =
         table.slots.iter().flatten().map(|bound| if let Bound::Choice(word, _) = bound { *word } else { "" }).collect();
     if columns.first() != Some(&"temperature") {
         worker.findings.push(Finding::new(
@@ -211,15 +217,45 @@ fn fill_from_table<'t>(
         ));
         return;
     }
+    let cells = rows_below(worker, entry, index, &columns, evaluate);
+    for (property, name) in [
+        (&mut substance.density, "density"),
+        (&mut substance.heat_capacity, "heat-capacity"),
+        (&mut substance.viscosity, "viscosity"),
+        (&mut substance.conductivity, "conductivity"),
+    ] {
+        if let (None, Some(column)) = (&property, columns.iter().position(|column| *column == name)) {
+            *property = Some(Property::Table(column_of(&cells, column)));
+        }
+    }
+    if let (None, Some(first), Some(last)) = (substance.valid, cells.first(), cells.last()) {
+        substance.valid = first.first().copied().zip(last.first().copied());
+    }
+}
+
+/// Temperatures and values of a column, where both are known.
+fn column_of(cells: &[Vec<f64>], column: usize) -> Vec<(f64, f64)> {
+    let rows = cells.iter().filter_map(|row| Some((*row.first()?, *row.get(column)?)));
+    rows.filter(|(temperature, value)| temperature.is_finite() && value.is_finite()).collect()
+}
+
+/// The rows below a statement, in SI, with rising temperatures.
+fn rows_below<'t>(
+    worker: &mut Worker<'_, 't>,
+    entry: &DeclaredEntry<'t>,
+    statement: usize,
+    columns: &[&str],
+    evaluate: &dyn Fn(&Compiled) -> f64,
+) -> Vec<Vec<f64>> {
     let mut cells: Vec<Vec<f64>> = Vec::new();
-    for row in &entry.rows {
+    for (_, row) in entry.rows.iter().filter(|(follows, _)| *follows == Some(statement)) {
         if row.cells.len() != columns.len() {
             let message = format!("This row has {} cells; the table has {} columns.", row.cells.len(), columns.len());
             worker.findings.push(Finding::new("unexpected-argument", Level::Error, entry.place(row.span), message));
             continue;
         }
         let mut values = Vec::new();
-        for (cell, column) in row.cells.iter().zip(&columns) {
+        for (cell, column) in row.cells.iter().zip(columns) {
             values.push(table_cell(worker, entry, cell, column, evaluate));
         }
         let temperature = values.first().copied().unwrap_or(f64::NAN);
@@ -230,26 +266,7 @@ fn fill_from_table<'t>(
         }
         cells.push(values);
     }
-    let column = |wanted: &str| {
-        let index = columns.iter().position(|column| *column == wanted)?;
-        let rows = cells.iter().filter_map(|row| Some((*row.first()?, *row.get(index)?)));
-        Some(Property::Table(
-            rows.filter(|(temperature, value)| temperature.is_finite() && value.is_finite()).collect(),
-        ))
-    };
-    for (property, name) in [
-        (&mut substance.density, "density"),
-        (&mut substance.heat_capacity, "heat-capacity"),
-        (&mut substance.viscosity, "viscosity"),
-        (&mut substance.conductivity, "conductivity"),
-    ] {
-        if property.is_none() {
-            *property = column(name);
-        }
-    }
-    if let (None, Some(first), Some(last)) = (substance.valid, cells.first(), cells.last()) {
-        substance.valid = first.first().copied().zip(last.first().copied());
-    }
+    cells
 }
 
 fn table_cell<'t>(
@@ -275,6 +292,7 @@ fn table_cell<'t>(
         "heat-capacity" => HEAT_CAPACITY,
         "viscosity" => VISCOSITY,
         "conductivity" => CONDUCTIVITY,
+        "expansion" => EXPANSION,
         _ => return f64::NAN,
     };
     let typed = worker.work(cell, base_of(entry), Scope::Deck);

@@ -137,11 +137,18 @@ pub(super) fn word(node: &Node<'_>, offset: usize) -> Word {
 
 fn phrase(node: Node<'_>, offset: usize) -> Phrase {
     let span = span_of(&node, offset);
-    let mut phrase = Phrase { span, word: Word { text: "".into(), span }, arguments: Vec::new(), links: Vec::new() };
+    let mut phrase = Phrase {
+        span,
+        word: Word { text: "".into(), span },
+        arguments: Vec::new(),
+        links: Vec::new(),
+        description: None,
+    };
     for part in node.into_inner() {
         match part.as_rule() {
             Rule::word => phrase.word = word(&part, offset),
             Rule::arguments => phrase.arguments = arguments(part, offset),
+            Rule::text => phrase.description = Some(word(&part, offset)),
             Rule::link_part => {
                 let mut link_part = LinkPart { link: Word { text: "".into(), span }, arguments: Vec::new() };
                 for inner in part.into_inner() {

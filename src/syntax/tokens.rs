@@ -84,6 +84,9 @@ fn mark_line(line: &Line, is_head: bool, into: &mut Vec<Token>) {
             for part in &phrase.links {
                 put(TokenKind::Link, part.link.span);
             }
+            if let Some(description) = &phrase.description {
+                put(TokenKind::Text, description.span);
+            }
             for argument in phrase.arguments.iter().chain(phrase.links.iter().flat_map(|part| &part.arguments)) {
                 mark_expression(argument, into);
             }

@@ -87,6 +87,8 @@ pub struct Phrase {
     pub arguments: Vec<Expression>,
     /// The links, each with what follows it.
     pub links: Vec<LinkPart>,
+    /// A text behind it all, without quotes: the description of a sweep.
+    pub description: Option<Word>,
 }
 
 /// A link and its arguments.

@@ -66,7 +66,7 @@ pub const WALLS: &[Choice] = &[
     choice("slip", "the fluid glides along the wall without friction"),
 ];
 
-/// `axis`
+/// The axis of a cylinder or annulus.
 pub const AXES: &[Choice] = &[choice("x", "along x"), choice("y", "along y"), choice("z", "along z; the default")];
 
 /// `time-stepping`

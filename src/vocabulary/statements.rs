@@ -213,7 +213,7 @@ pub const STATEMENTS: &[StatementRow] = &[
     row(
         "expansion",
         &[In::Substance],
-        &[slot("", "expansion", Takes::PropertyForm(EXPANSION), REQUIRED)],
+        &[slot("", "expansion", Takes::PropertyForm(EXPANSION), OPTIONAL)],
         ONCE,
         "Thermal expansion; without it, the slope of the density.",
         "expansion 2.1e-4 1/K",
@@ -364,10 +364,14 @@ pub const STATEMENTS: &[StatementRow] = &[
     row(
         "cylinder",
         &[In::Region],
-        &[slot("", "diameter", A_LENGTH, REQUIRED), slot("by", "height", A_LENGTH, REQUIRED)],
+        &[
+            slot("", "diameter", A_LENGTH, REQUIRED),
+            slot("by", "height", A_LENGTH, REQUIRED),
+            slot("along", "axis", Takes::Choice(offer::AXES), OPTIONAL),
+        ],
         ONCE,
-        "A cylinder: diameter and length along its axis, which is z unless `axis` says otherwise.",
-        "cylinder 0.8 m by 1.6 m",
+        "A cylinder: diameter, length, and the direction of its axis, z where none is given.",
+        "cylinder 0.8 m by 1.6 m along z",
     ),
     row(
         "sphere",
@@ -384,10 +388,11 @@ pub const STATEMENTS: &[StatementRow] = &[
             slot("", "inner-diameter", A_LENGTH, REQUIRED),
             slot("by", "outer-diameter", A_LENGTH, REQUIRED),
             slot("by", "height", A_LENGTH, OPTIONAL),
+            slot("along", "axis", Takes::Choice(offer::AXES), OPTIONAL),
         ],
         ONCE,
-        "The space between two coaxial cylinders: inner and outer diameter and length; without a length, a plane case across the axis.",
-        "annulus 0.05 m by 0.12 m by 1 m",
+        "The space between two coaxial cylinders: inner and outer diameter, length, and the direction of the axis; without a length, a plane case across the axis.",
+        "annulus 0.05 m by 0.12 m by 1 m along x",
     ),
     row(
         "gap",
@@ -420,14 +425,6 @@ pub const STATEMENTS: &[StatementRow] = &[
         ONCE,
         "The space between two plates that is open below and above: spacing, height and width.",
         "channel 20 mm by 0.5 m by 0.3 m",
-    ),
-    row(
-        "axis",
-        &[In::Region],
-        &[slot("", "axis", Takes::Choice(offer::AXES), REQUIRED)],
-        ONCE,
-        "The direction of the axis of a cylinder or annulus.",
-        "axis x",
     ),
     row(
         "filled",
@@ -628,9 +625,12 @@ pub const STATEMENTS: &[StatementRow] = &[
     row(
         "enters",
         &[In::Boundary],
-        &[slot("at", "rate", of(&[SPEED, VOLUME_FLOW, MASS_FLOW]), REQUIRED)],
+        &[
+            slot("at", "rate", of(&[SPEED, VOLUME_FLOW, MASS_FLOW]), REQUIRED),
+            slot("along", "direction", Takes::Direction, OPTIONAL),
+        ],
         ONCE,
-        "How fast fluid enters: a speed, a volume flow or a mass flow.",
+        "How fast fluid enters: a speed, a volume flow or a mass flow; straight in where no direction is given.",
         "enters at 0.2 m/s",
     ),
     row(
@@ -739,9 +739,9 @@ pub const STATEMENTS: &[StatementRow] = &[
     row(
         "spacing",
         &[In::Mesh],
-        &[slot("", "spacing", Takes::Choice(offer::SPACINGS), REQUIRED)],
+        &[slot("", "spacing", Takes::ChoiceOrQuantity(offer::SPACINGS, LENGTH), REQUIRED)],
         ONCE,
-        "How cells are spread.",
+        "How cells are spread, or the size of cells that are all alike.",
         "spacing graded",
     ),
     // run
