@@ -37,7 +37,7 @@ run
         expect(
             r##"
 given
-    a = 1 m + 2  #! bare-number, unused-name
+    a = 1 m + 2  #! bare-number
 "##,
         );
     }
@@ -47,7 +47,7 @@ given
         expect(
             r##"
 given
-    a = 2 * 1 m  #! unused-name
+    a = 2 * 1 m
 "##,
         );
     }

@@ -27,7 +27,7 @@ mod tests {
         expect(
             r##"
 given
-    a = 1 m + 2 s  #! dimension-mismatch "length", unused-name
+    a = 1 m + 2 s  #! dimension-mismatch "length"
 "##,
         );
     }
@@ -47,8 +47,8 @@ run
         expect(
             r##"
 given
-    a = sqrt(4 m^2) + 1 m        #! unused-name
-    b = sqrt(9.81 m/s^2 * 1 m) + 1 m  #! dimension-mismatch, unused-name
+    a = sqrt(4 m^2) + 1 m
+    b = sqrt(9.81 m/s^2 * 1 m) + 1 m  #! dimension-mismatch
 "##,
         );
     }
@@ -58,7 +58,7 @@ given
         expect(
             r##"
 given
-    a = exp(1 m)  #! dimension-mismatch, unused-name
+    a = exp(1 m)  #! dimension-mismatch
 "##,
         );
     }
@@ -68,7 +68,7 @@ given
         expect(
             r##"
 given
-    q = 6 W/m^2/K * (30 degC - 20 degC) * 2 m^2 + 1 kW  #! unused-name
+    q = 6 W/m^2/K * (30 degC - 20 degC) * 2 m^2 + 1 kW
 "##,
         );
     }

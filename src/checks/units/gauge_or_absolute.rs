@@ -27,7 +27,7 @@ mod tests {
         expect(
             r##"
 given
-    p = 1 barg + 2 barg  #! gauge-or-absolute, unused-name
+    p = 1 barg + 2 barg  #! gauge-or-absolute
 "##,
         );
     }
@@ -37,7 +37,7 @@ given
         expect(
             r##"
 given
-    p = 1 barg + 2 bar  #! unused-name
+    p = 1 barg + 2 bar
 "##,
         );
     }

@@ -27,7 +27,7 @@ mod tests {
         expect(
             r##"
 given
-    a = 20 degC + 30 degC  #! temperature-kind "adds two points", unused-name
+    a = 20 degC + 30 degC  #! temperature-kind "adds two points"
 "##,
         );
     }
@@ -37,7 +37,7 @@ given
         expect(
             r##"
 given
-    q = 6 W/m^2/K * 20 degC  #! temperature-kind "absolute zero", unused-name
+    q = 6 W/m^2/K * 20 degC  #! temperature-kind "absolute zero"
 "##,
         );
     }
@@ -47,7 +47,7 @@ given
         expect(
             r##"
 given
-    T = 20 degC +- 2 degC  #! temperature-kind, unused-name
+    T = 20 degC +- 2 degC  #! temperature-kind
 "##,
         );
     }
@@ -59,8 +59,8 @@ given
 given
     dT = 5 K
     T_hot = 20 degC + dT
-    q = 6 W/m^2/K * dT  #! unused-name
-    r = 6 W/m^2/K * (T_hot - 10 degC)  #! unused-name
+    q = 6 W/m^2/K * dT
+    r = 6 W/m^2/K * (T_hot - 10 degC)
 "##,
         );
     }
@@ -71,8 +71,8 @@ given
             r##"
 given
     T0 = 300 K
-    rho = 1 bar * 28.97 g/mol / (R * T0)  #! unused-name
-    T1 = T0 - 10 degC  #! unused-name
+    rho = 1 bar * 28.97 g/mol / (R * T0)
+    T1 = T0 - 10 degC
 "##,
         );
     }

@@ -28,7 +28,7 @@ mod tests {
             r##"
 given
     a = 1 m
-    b = 2*a  #! unit-spacing, unused-name
+    b = 2*a  #! unit-spacing
 "##,
         );
     }
@@ -38,7 +38,7 @@ given
         expect(
             r##"
 given
-    a = 2 m / s  #! unit-spacing "no white space", unused-name
+    a = 2 m / s  #! unit-spacing "no white space"
 "##,
         );
     }
@@ -49,7 +49,7 @@ given
             r##"
 given
     s = 4 s
-    a = 2 m / s  #! unused-name
+    a = 2 m / s
 "##,
         );
     }

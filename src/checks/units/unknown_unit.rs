@@ -27,7 +27,7 @@ mod tests {
         expect(
             r##"
 given
-    a = 3 Mpa  #! unknown-unit "MPa", unused-name
+    a = 3 Mpa  #! unknown-unit "MPa"
 "##,
         );
     }
@@ -37,7 +37,7 @@ given
         expect(
             r##"
 given
-    a = 3 W/m2/K  #! unknown-unit, unused-name
+    a = 3 W/m2/K  #! unknown-unit
 "##,
         );
     }
@@ -47,8 +47,8 @@ given
         expect(
             r##"
 given
-    a = 3 MPa      #! unused-name
-    b = 5 W/(m².K) #! unused-name
+    a = 3 MPa
+    b = 5 W/(m².K)
 "##,
         );
     }

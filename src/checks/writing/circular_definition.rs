@@ -49,7 +49,7 @@ given
         expect(
             r##"
 given
-    b = a / 2  #! unused-name
+    b = a / 2
     a = 2 m
 "##,
         );

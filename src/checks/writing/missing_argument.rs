@@ -26,7 +26,7 @@ mod tests {
     fn behind_the_word() {
         expect(
             r##"
-fluid f  #! unused-name
+fluid f
     substance  #! missing-argument
 "##,
         );
@@ -47,7 +47,7 @@ run
         expect(
             r##"
 given
-    a =  #! missing-argument, unused-name
+    a =  #! missing-argument
 "##,
         );
     }

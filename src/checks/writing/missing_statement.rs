@@ -35,7 +35,7 @@ waive density-span  #! missing-statement "because"
     fn a_substance_without_a_density() {
         expect(
             r##"
-substance oil  #! missing-statement "density", unused-name
+substance oil  #! missing-statement "density"
     valid from 0 degC to 50 degC
 "##,
         );

@@ -28,7 +28,7 @@ mod tests {
             r##"
 given
     a = 0 m
-    b = 1 m / a  #! no-finite-value, unused-name
+    b = 1 m / a  #! no-finite-value
 "##,
         );
     }
@@ -38,7 +38,7 @@ given
         expect(
             r##"
 given
-    a = 1e999 m  #! no-finite-value, unused-name
+    a = 1e999 m  #! no-finite-value
 "##,
         );
     }
@@ -48,7 +48,7 @@ given
         expect(
             r##"
 given
-    a = 1e300 m  #! unused-name
+    a = 1e300 m
 "##,
         );
     }

@@ -27,7 +27,7 @@ mod tests {
         expect(
             r##"
 given
-    a = 1 m  #! unused-name
+    a = 1 m
     a = 2 m  #! repeated-name
 "##,
         );
@@ -38,7 +38,7 @@ given
         expect(
             r##"
 given
-    T = 20 degC  #! unused-name
+    T = 20 degC
 vary
     T over [20 degC, 30 degC]  #! repeated-name
 "##,
@@ -49,7 +49,7 @@ vary
     fn an_entry() {
         expect(
             r##"
-solid steel  #! unused-name
+solid steel
     conductivity 16 W/m/K
 solid steel  #! repeated-name
     conductivity 16 W/m/K

@@ -49,9 +49,9 @@ case "two"  #! repeated-statement
         expect(
             r##"
 given
-    a = 1 m  #! unused-name
+    a = 1 m
 given
-    b = 1 m  #! unused-name
+    b = 1 m
 "##,
         );
     }

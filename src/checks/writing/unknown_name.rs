@@ -27,8 +27,8 @@ mod tests {
         expect(
             r##"
 given
-    height = 1 m  #! unused-name
-    twice = 2 * heigth  #! unknown-name "heigth", unused-name
+    height = 1 m
+    twice = 2 * heigth  #! unknown-name "heigth"
 "##,
         );
     }
@@ -37,7 +37,7 @@ given
     fn a_fluid() {
         expect(
             r##"
-fluid room_air  #! unused-name
+fluid room_air
     substance airr  #! unknown-name
 "##,
         );
@@ -48,9 +48,9 @@ fluid room_air  #! unused-name
         expect(
             r##"
 given
-    a = 3 m  #! unused-name
-    b = 1 m  #! unused-name
-    c = a-b  #! unknown-name "spaces", unused-name
+    a = 3 m
+    b = 1 m
+    c = a-b  #! unknown-name "spaces"
 "##,
         );
     }
@@ -62,7 +62,7 @@ given
 fluid room_air
     substance air
 given
-    mu = room_air.viscosity  #! unknown-name "states no viscosity", unused-name
+    mu = room_air.viscosity  #! unknown-name "states no viscosity"
 "##,
         );
     }

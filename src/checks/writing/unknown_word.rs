@@ -46,7 +46,7 @@ case "title"
     fn a_choice() {
         expect(
             r##"
-fluid room_air  #! unused-name
+fluid room_air
     substance    air
     reference    20 degC at 1 bar
     density-law  bousinesq  #! unknown-word

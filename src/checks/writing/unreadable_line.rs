@@ -27,8 +27,8 @@ mod tests {
         expect(
             r##"
 given
-    a = 1 m {  #! unreadable-line "Braces", unused-name
-    b = 2 m    #! unused-name
+    a = 1 m {  #! unreadable-line "Braces"
+    b = 2 m
 "##,
         );
     }
@@ -48,7 +48,7 @@ case "title  #! unreadable-line "not closed"
         expect(
             r##"
 given
-    a = 0,5 m  #! unreadable-line "decimal mark", unused-name
+    a = 0,5 m  #! unreadable-line "decimal mark"
 "##,
         );
     }

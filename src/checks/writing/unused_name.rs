@@ -26,6 +26,7 @@ mod tests {
     fn a_value() {
         expect(
             r##"
+case "x"
 given
     a = 1 m  #! unused-name
 "##,
@@ -36,6 +37,7 @@ given
     fn a_solid() {
         expect(
             r##"
+case "x"
 solid steel  #! unused-name
     conductivity 16 W/m/K
 "##,
@@ -46,10 +48,21 @@ solid steel  #! unused-name
     fn sound() {
         expect(
             r##"
+case "x"
 given
     a = 1 s
 run
     transient for 1 h step a
+"##,
+        );
+    }
+
+    #[test]
+    fn a_file_for_others_to_include() {
+        expect(
+            r##"
+given
+    a = 1 m
 "##,
         );
     }
