@@ -33,6 +33,15 @@ pub static CHECKS: &[&Check] = &[
     &units::temperature_kind::CHECK,
     &units::unit_spacing::CHECK,
     &units::gauge_or_absolute::CHECK,
+    &properties::likely_unit_slip::CHECK,
+    // properties
+    &properties::property_off_library::CHECK,
+    &properties::property_elsewhere::CHECK,
+    &properties::properties_disagree::CHECK,
+    &properties::expansion_not_at_reference::CHECK,
+    &properties::outside_property_range::CHECK,
+    &properties::phase_change::CHECK,
+    &properties::not_physical::CHECK,
     // density law
     &density_law::density_span::CHECK,
     &density_law::buoyancy_error::CHECK,

@@ -3,6 +3,7 @@
 pub mod check;
 pub mod density_law;
 pub mod list;
+pub mod properties;
 pub mod units;
 pub mod writing;
 

@@ -34,14 +34,7 @@ pub static NUMBER: Weighed = Weighed {
 const PICK: fn(&CriterionValues) -> f64 = |values| values.adiabatic_lapse;
 
 /// |α| g H T0 / (cp ΔT); `NaN` where nothing drives a flow.
-pub fn pressure_work(
-    expansion: f64,
-    gravity: f64,
-    height: f64,
-    reference: f64,
-    heat_capacity: f64,
-    span: f64,
-) -> f64 {
+pub fn pressure_work(expansion: f64, gravity: f64, height: f64, reference: f64, heat_capacity: f64, span: f64) -> f64 {
     if span > 0.0 { expansion.abs() * gravity * height * reference / (heat_capacity * span) } else { f64::NAN }
 }
 

@@ -43,7 +43,8 @@ fn finding(region: &Assessed<'_>, weighing: &Weighing) -> Option<Finding> {
     let name = &region.region.name.text;
     let (level, what, margin) = if numbers.given_velocity > 0.0 {
         let (level, limit) = weighing.over(numbers.richardson)?;
-        let what = format!("Ri is {} there, so buoyancy counts beside the given flow", format_number(numbers.richardson));
+        let what =
+            format!("Ri is {} there, so buoyancy counts beside the given flow", format_number(numbers.richardson));
         (level, what, ("Ri", numbers.richardson, limit))
     } else {
         let onset = onset(region.physics.arrangement.kind);

@@ -70,7 +70,14 @@ fn of_region(subject: &Subject<'_>, region: &Assessed<'_>) -> Vec<Criterion> {
     let weighed = NUMBERS.iter().map(|number| {
         let limits = weighing(number.check, &subject.case.practice);
         let weight = number.weigh(region, &limits);
-        criterion(number.check, number.symbol, weight.value, weight.band, limits.limits, weight.over.map(|(level, _)| level))
+        criterion(
+            number.check,
+            number.symbol,
+            weight.value,
+            weight.band,
+            limits.limits,
+            weight.over.map(|(level, _)| level),
+        )
     });
     // Whether α changes sign has no scale to leave a margin on: over 0 it does.
     let reversal = region.values.density_reversal;

@@ -36,11 +36,11 @@ fn finding(subject: &Subject<'_>, region: &Assessed<'_>, level: Level) -> Option
     let (lowest, highest) = (region.bracket.lowest.band.0, region.bracket.highest.band.1);
     let unit = remedy::unit_of_reference(region.fluid);
     let middle = remedy::mid_span(region.conditions.lowest, region.conditions.highest, unit)?;
-    let conditions =
-        Conditions { reference: middle, lowest, highest, stated_expansion: None, ..region.conditions };
+    let conditions = Conditions { reference: middle, lowest, highest, stated_expansion: None, ..region.conditions };
     let values = region.under(&conditions);
     // A density span that cannot be worked out, or is nothing, is no ground for advice.
-    let is_known = values.density_span > 0.0 && values.buoyancy_error.is_finite() && values.covered == (lowest, highest);
+    let is_known =
+        values.density_span > 0.0 && values.buoyancy_error.is_finite() && values.covered == (lowest, highest);
     if !is_known || values.densest_at.is_finite() {
         return None;
     }
@@ -48,7 +48,8 @@ fn finding(subject: &Subject<'_>, region: &Assessed<'_>, level: Level) -> Option
     for number in NUMBERS {
         let value = (number.value)(region, &values);
         let limits = weighing(number.check, &subject.case.practice).limits;
-        let warns = limits.iter().find(|(level, _)| *level >= Level::Warning).map_or(f64::INFINITY, |(_, limit)| *limit);
+        let warns =
+            limits.iter().find(|(level, _)| *level >= Level::Warning).map_or(f64::INFINITY, |(_, limit)| *limit);
         if value > WIDE * warns {
             return None;
         }
@@ -70,7 +71,9 @@ fn finding(subject: &Subject<'_>, region: &Assessed<'_>, level: Level) -> Option
         .about(&*region.region.name.text);
     let Fix { mut edits, title, sure } = remedy::change_law(law, DensityLaw::Boussinesq, false);
     let is_off = region.fluid.reference_temperature.as_ref().is_some_and(|stated| (stated.si - middle).abs() > 0.5);
-    edits.extend(remedy::move_reference(region.fluid, middle, false).filter(|_| is_off).into_iter().flat_map(|fix| fix.edits));
+    edits.extend(
+        remedy::move_reference(region.fluid, middle, false).filter(|_| is_off).into_iter().flat_map(|fix| fix.edits),
+    );
     finding.fixes.push(Fix { title, edits, sure });
     Some(finding)
 }

@@ -4,8 +4,8 @@ use super::assess::{Assessed, Said, Weighed};
 use super::criterion::CriterionValues;
 use super::remedy;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
-use crate::quantity::display::{format_number, format_si};
 use crate::quantity::dimension_names::SPEED;
+use crate::quantity::display::{format_number, format_si};
 use crate::syntax::{Finding, Level};
 
 /// The check.

@@ -57,9 +57,12 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             let rests_on_estimate = lowest.estimate.is_some() || highest.estimate.is_some();
             let is_certain = !rests_on_estimate && !states_a_property(fluid);
             finding.fixes.extend(remedy::move_reference(fluid, middle, is_certain));
-            Some(regions.iter().filter(|region| std::ptr::eq(region.fluid, fluid)).fold(finding, |finding, region| {
-                with_ends(finding, region.bracket)
-            }))
+            Some(
+                regions
+                    .iter()
+                    .filter(|region| std::ptr::eq(region.fluid, fluid))
+                    .fold(finding, |finding, region| with_ends(finding, region.bracket)),
+            )
         })
         .collect()
 }
