@@ -52,7 +52,7 @@ pub fn misstatement(samples: &[Sample], reference: f64, at_reference: &Propertie
         let error = (true_buoyancy - linear_buoyancy).abs();
         let share = if farthest == 0.0 { 0.0 } else { error / greatest_buoyancy };
         // The first known share replaces the unknown one.
-        if share.is_finite() && !(share <= largest.share) {
+        if share.is_finite() && (largest.share.is_nan() || share > largest.share) {
             let is_understated = true_buoyancy.abs() > linear_buoyancy.abs();
             largest = Misstatement { share, at: *temperature, is_understated };
         }

@@ -48,7 +48,8 @@ fn finding(region: &Assessed<'_>, weighing: &Weighing) -> Option<Finding> {
         (level, what, ("Ri", numbers.richardson, limit))
     } else {
         let onset = onset(region.physics.arrangement.kind);
-        if !(numbers.rayleigh > onset) {
+        let moves = numbers.rayleigh > onset;
+        if !moves {
             return None;
         }
         let what = format!("Ra is {} there, so buoyancy alone moves the fluid", format_number(numbers.rayleigh));

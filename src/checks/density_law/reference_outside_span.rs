@@ -32,7 +32,8 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             let Span { lowest, highest } = span_of(fluid, &regions)?;
             let beyond = (stated.si - highest.value).max(lowest.value - stated.si);
             // A reference that is one end of the span, written in another unit, differs in the last digit.
-            if !(beyond > 1e-6) {
+            let is_outside = beyond > 1e-6;
+            if !is_outside {
                 return None;
             }
             let is_above = stated.si > highest.value;

@@ -1,7 +1,7 @@
 //! `expansion-not-at-reference`: the expansion that is stated for a gas is not one over the reference temperature.
 
 use super::slip;
-use super::stated::{as_written, deviation, in_unit_of, is_gas, reference_pressure, reference_temperature};
+use super::stated::{about, as_written, deviation, in_unit_of, is_gas, reference_pressure, reference_temperature};
 use crate::checks::density_law::assess::{per_cent, temperature, two_digits};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::substances::Medium;
@@ -42,7 +42,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             let (level, limit) = weighing.over(off)?;
             let belongs = 1.0 / stated.si;
             let belongs = if (100.0..2000.0).contains(&belongs) {
-                format!("; it belongs to {}", temperature(belongs))
+                format!("; it belongs to {}", about(belongs))
             } else {
                 String::new()
             };
@@ -71,4 +71,65 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             Some(finding)
         })
         .collect()
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn one_over_the_freezing_point() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid room
+    substance   air
+    reference   25 degC
+    density-law boussinesq
+    expansion   3.66e-3 1/K   #! expansion-not-at-reference "belongs to 0 degC"
+"##,
+        );
+    }
+
+    #[test]
+    fn a_liquid_s_for_a_gas() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid room
+    substance   air
+    reference   25 degC
+    expansion   2.1e-4 1/K   #! expansion-not-at-reference "factor 16"
+"##,
+        );
+    }
+
+    #[test]
+    fn one_over_the_reference() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid room
+    substance   air
+    reference   25 degC
+    expansion   0.0034 1/K
+fluid bath
+    substance   water
+    reference   25 degC
+    expansion   2.57e-4 1/K
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_is_one_over_the_reference() {
+        let text = r##"
+fluid room
+    substance   air
+    reference   300 K
+    expansion   3.66e-3 1/K
+"##;
+        assert!(after_fix(CHECK.name, text).contains("expansion   0.003333 1/K"), "{}", after_fix(CHECK.name, text));
+    }
 }

@@ -58,11 +58,9 @@ pub fn judged<'a>(subject: &Subject<'a>) -> Vec<(AtReference<'a>, Vec<Judged<'a>
                     let deviation = deviation(value.si, own);
                     let is_other_matter =
                         slip::is_slip(&slips, value) || is_of_other_check(subject, &fluid, property, value);
-                    let verdict = if is_other_matter || !(deviation > CLOSE) {
-                        Verdict::Fits
-                    } else {
-                        explain(&fluid, property, value.si)
-                    };
+                    let is_off = deviation > CLOSE;
+                    let verdict =
+                        if is_off && !is_other_matter { explain(&fluid, property, value.si) } else { Verdict::Fits };
                     Some(Judged { value, property, own, deviation, verdict })
                 })
                 .collect();

@@ -206,3 +206,73 @@ fn of_mesh_and_run<'a>(case: &'a Case, all: &mut Vec<Held<'a>>) {
         add(all, Some(step), "step", "run", Must::BeAbove0);
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn each_kind() {
+        expect_of(
+            CHECK.name,
+            r##"
+case "Nothing of this can be"
+    gravity -9.81 m/s^2   #! not-physical "gravity"
+fluid custom
+    density      -1 kg/m^3   #! not-physical "must be above 0"
+    viscosity    0 Pa.s      #! not-physical
+    reference    -300 degC   #! not-physical "absolute zero"
+solid steel
+    emissivity   -0.2        #! not-physical "between 0 and 1"
+region room
+    box          1 m by 0 m by 3 m   #! not-physical "size of room"
+    tilt         200 deg     #! not-physical
+region ring
+    annulus      0.2 m by 0.1 m   #! not-physical "inner diameter"
+boundary w of room
+    side west
+    wall
+    exchanges    -3 W/m^2/K with 20 degC   #! not-physical
+boundary e of room
+    side east
+    wall
+    held at      -280 degC   #! not-physical
+mesh of room
+    cells        10.5 by 10 by 0   #! not-physical "number of cells of room, 10.5", not-physical "number of cells of room, 0"
+    growth       0.8         #! not-physical "1 or more"
+run
+    transient for 0 s step -1 s   #! not-physical "duration", not-physical "step"
+"##,
+        );
+    }
+
+    #[test]
+    fn sound() {
+        expect_of(
+            CHECK.name,
+            r##"
+case "A room"
+    gravity 9.81 m/s^2 along -z
+fluid custom
+    density      1 kg/m^3
+    viscosity    1e-5 Pa.s
+    expansion    -3e-5 1/K
+    reference    -20 degC
+region room
+    box          1 m by 1 m by 3 m
+    tilt         180 deg
+boundary w of room
+    side west
+    wall
+    emissivity   0
+    exchanges    0 W/m^2/K with 20 degC
+mesh of room
+    cells        10 by 10 by 1
+    growth       1
+run
+    transient for 10 s step 0.1 s
+"##,
+        );
+    }
+}

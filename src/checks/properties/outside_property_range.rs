@@ -115,3 +115,48 @@ fn range_of(medium: &Medium<'_>) -> String {
     let (lowest, highest) = medium.range();
     format!("from {} to {}", temperature(lowest), temperature(highest))
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn the_reference() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid hot_air
+    substance   air
+    reference   1400 degC   #! outside-property-range "from -73.15 degC to 1227 degC"
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fraction() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid brine
+    substance   ethylene_glycol at 85 %   #! outside-property-range "85 %"
+    reference   20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn within() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid hot_air
+    substance   air
+    reference   300 degC
+fluid brine
+    substance   ethylene_glycol at 30 %
+    reference   20 degC
+"##,
+        );
+    }
+}

@@ -152,3 +152,51 @@ fn remedy(phase: Phase) -> String {
         verb => format!("Temperatures above {}, where it no longer {verb}.", temperature(phase.at)),
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn a_reference_that_boils_or_freezes() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid steam_kettle
+    substance   water
+    reference   110 degC at 1 bar   #! phase-change "water boils at 99.6"
+fluid ice_pond
+    substance   water
+    reference   -5 degC   #! phase-change "water freezes at 0"
+"##,
+        );
+    }
+
+    #[test]
+    fn pressure_keeps_it_liquid() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid boiler
+    substance   water
+    reference   110 degC at 3 bar
+fluid ice_bath
+    substance   water
+    reference   0 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn on_a_mountain() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid kettle
+    substance   water
+    reference   95 degC at 0.79 bar   #! phase-change "boils at 93"
+"##,
+        );
+    }
+}

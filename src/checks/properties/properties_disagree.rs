@@ -154,3 +154,82 @@ fn blamed(subject: &Subject<'_>, fluid: &Fluid, values: &[(&'static PropertyRow,
         _ => String::new(),
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn three_viscosities() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid custom
+    density             900 kg/m^3
+    viscosity           0.09 Pa.s
+    kinematic-viscosity 1.2e-4 m^2/s   #! properties-disagree "20 % apart"
+"##,
+        );
+    }
+
+    #[test]
+    fn the_library_tells_which_one_is_off() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid bath
+    substance           water
+    reference           20 degC
+    density             1060 kg/m^3
+    viscosity           1.002 mPa.s
+    kinematic-viscosity 1.004 mm^2/s   #! properties-disagree "agrees with all of them but the density"
+"##,
+        );
+    }
+
+    #[test]
+    fn prandtl_number_beside_its_parts() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid custom
+    viscosity     1.8e-5 Pa.s
+    heat-capacity 1005 J/kg/K
+    conductivity  0.026 W/m/K
+    prandtl       7.1   #! properties-disagree "factor 10"
+"##,
+        );
+    }
+
+    #[test]
+    fn an_ideal_gas_has_the_density_of_its_law() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid smoke
+    substance   air
+    reference   300 degC
+    density-law ideal-gas
+    density     1.2 kg/m^3   #! properties-disagree "0.6159 kg/m^3"
+"##,
+        );
+    }
+
+    #[test]
+    fn rounded_values_agree() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid custom
+    density             1.2 kg/m^3
+    viscosity           1.8e-5 Pa.s
+    kinematic-viscosity 1.5e-5 m^2/s
+    heat-capacity       1005 J/kg/K
+    conductivity        0.026 W/m/K
+    diffusivity         2.15e-5 m^2/s
+    prandtl             0.7
+"##,
+        );
+    }
+}

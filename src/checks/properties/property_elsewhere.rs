@@ -2,8 +2,7 @@
 
 use super::judge::{Judged, Verdict, judged};
 use super::property_off_library::{compared, with_own_value};
-use super::stated::{AtReference, deviation};
-use crate::checks::density_law::assess::temperature;
+use super::stated::{AtReference, about, deviation};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::syntax::{Finding, Level};
 
@@ -52,7 +51,7 @@ fn finding(
         "{}; it is that of {} at {}{beside}",
         compared(fluid, judged),
         fluid.medium.substance.name.text,
-        temperature(at)
+        about(at)
     );
     let finding = Finding::new(CHECK.name, level, judged.value.origin.place, message);
     Some(with_own_value(finding, fluid, judged, limit))
@@ -69,4 +68,79 @@ fn companions(fluid: &AtReference<'_>, judged: &Judged<'_>, at: f64, all: &[Judg
         })
         .map(|other| other.property.name)
         .collect()
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn the_row_of_another_temperature() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid bath
+    substance  water
+    reference  20 degC
+    viscosity  0.653 mPa.s   #! property-elsewhere "it is that of water at 40 degC"
+fluid oil
+    substance  engine_oil
+    reference  40 degC
+    viscosity  0.84 Pa.s   #! property-elsewhere "at 20 degC"
+"##,
+        );
+    }
+
+    #[test]
+    fn several_of_one_row() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid bath
+    substance    water
+    reference    20 degC
+    viscosity    0.5465 mPa.s   #! property-elsewhere "as is the density"
+    density      988.0 kg/m^3
+"##,
+        );
+    }
+
+    #[test]
+    fn what_no_temperature_near_has_is_off() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid bath
+    substance    water
+    reference    20 degC
+    conductivity 0.9 W/m/K
+"##,
+        );
+    }
+
+    #[test]
+    fn the_value_at_the_reference() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid bath
+    substance    water
+    reference    40 degC
+    viscosity    0.653 mPa.s
+    expansion    3.85e-4 1/K
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_takes_the_value_at_the_reference() {
+        let text = r##"
+fluid bath
+    substance  water
+    reference  20 degC
+    viscosity  0.653 mPa.s
+"##;
+        assert!(after_fix(CHECK.name, text).contains("viscosity  1.002 mPa.s"), "{}", after_fix(CHECK.name, text));
+    }
 }

@@ -86,3 +86,88 @@ pub fn with_own_value(finding: Finding, fluid: &AtReference<'_>, judged: &Judged
     }
     finding
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn off_by_more_than_the_library_has_within_reach() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid water_15
+    substance     water
+    reference     15 degC
+    heat-capacity 4400 J/kg/K  #! property-off-library "5 % above"
+    conductivity  0.9 W/m/K    #! property-off-library "53 % above"
+    density       2100 kg/m^3  #! property-off-library "2.1 times"
+"##,
+        );
+    }
+
+    #[test]
+    fn density_of_sea_level_on_a_mountain() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid cabinet_air
+    substance   air
+    reference   25 degC at 0.79 bar
+    density-law boussinesq
+    density     1.184 kg/m^3  #! property-off-library "one standard atmosphere"
+"##,
+        );
+    }
+
+    #[test]
+    fn handbook_values_rounded() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid bath
+    substance     water
+    reference     20 degC
+    density       998 kg/m^3
+    viscosity     1.0 mPa.s
+    conductivity  0.6 W/m/K
+    heat-capacity 4.18 kJ/kg/K
+    expansion     2.1e-4 1/K
+    prandtl       7.0
+fluid room
+    substance     air
+    reference     25 degC
+    density       1.2 kg/m^3
+    viscosity     1.8e-5 Pa.s
+    conductivity  0.026 W/m/K
+    heat-capacity 1005 J/kg/K
+    prandtl       0.71
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_takes_the_library_value() {
+        let text = r##"
+fluid water_15
+    substance     water
+    reference     15 degC
+    heat-capacity 4400 J/kg/K
+"##;
+        assert!(after_fix(CHECK.name, text).contains("heat-capacity 4189 J/kg/K"), "{}", after_fix(CHECK.name, text));
+    }
+
+    #[test]
+    fn where_a_name_carries_the_value_its_definition_is_mended() {
+        let text = r##"
+given
+    cp = 4.4 kJ/kg/K
+fluid water_15
+    substance     water
+    reference     15 degC
+    heat-capacity cp
+"##;
+        assert!(after_fix(CHECK.name, text).contains("cp = 4.189 kJ/kg/K"), "{}", after_fix(CHECK.name, text));
+    }
+}

@@ -35,7 +35,8 @@ pub fn slips(subject: &Subject<'_>) -> Vec<Slip> {
 
 fn in_other_unit(fluid: &AtReference<'_>, property: &PropertyRow, value: &Value, own: f64) -> Option<Slip> {
     let off = deviation(value.si, own);
-    if !(off > WRONG) {
+    let is_wrong = off > WRONG;
+    if !is_wrong {
         return None;
     }
     let number = number_written(value)?;

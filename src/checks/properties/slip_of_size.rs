@@ -76,7 +76,8 @@ fn of_first_cell(case: &Case, mesh: &Mesh) -> Option<Slip> {
     let region = case.region(&mesh.region.as_ref()?.text)?;
     let lengths = lengths(region.shape.as_ref()?);
     let least = lengths.iter().map(|length| length.si).fold(f64::INFINITY, f64::min);
-    if !(first.si >= 0.5 * least) {
+    let fills_it = first.si >= 0.5 * least;
+    if !fills_it {
         return None;
     }
     rescaled(first, "m", "mm", &region.name.text, |meant| {

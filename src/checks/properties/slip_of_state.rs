@@ -120,11 +120,11 @@ fn of_temperature(stated: &Stated<'_>, all: &[Stated<'_>]) -> Option<Slip> {
         .filter(|_| !holds(si))
         .map_or(String::new(), |medium| format!("; {} has no data there", medium.substance.name.text));
     let message = format!(
-        "{} of {} is {}{substance}{beside}; {meant} is {}",
+        "{} of {} is {}{substance}{beside}; {meant}{} was probably meant",
         as_written(stated.value),
         stated.owner,
         temperature(si),
-        temperature(evidence),
+        if meant.ends_with(" K") { format!(", {},", temperature(evidence)) } else { String::new() },
     );
     Some(Slip::of(stated.value, stated.owner, Level::Error, meant, middle.is_some(), message))
 }

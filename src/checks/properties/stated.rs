@@ -179,6 +179,11 @@ pub fn number_written(value: &Value) -> Option<f64> {
     (unit.scale != crate::quantity::Scale::Gauge).then(|| unit.from_si(value.si)).filter(|number| number.is_finite())
 }
 
+/// A temperature that a value points to, to the whole degree: no more is meant by it.
+pub fn about(kelvin: f64) -> String {
+    format!("{} degC", (kelvin - 273.15).round() + 0.0)
+}
+
 /// A number as it would be written again: without the digits that conversion to SI and back leaves.
 pub fn rewritten(number: f64) -> String {
     let rounded: f64 = format!("{number:.11e}").parse().unwrap_or(number);
