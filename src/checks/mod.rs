@@ -1,7 +1,9 @@
 //! The checks, one file each, and the list of them.
 
 pub mod check;
+pub mod density_law;
 pub mod list;
+pub mod properties;
 pub mod units;
 pub mod writing;
 

@@ -1,0 +1,68 @@
+//! `adiabatic-lapse`: the work of pressure against the heat that is carried by convection.
+
+use super::assess::{Said, Weighed};
+use super::{criterion::CriterionValues, remedy};
+use crate::checks::{Basis, Check, Family, Subject, Weighing};
+use crate::quantity::display::{format_difference, format_number};
+use crate::syntax::{Edit, Finding, Fix, Level, Span};
+
+/// The check.
+pub static CHECK: Check = Check {
+    name: "adiabatic-lapse",
+    family: Family::DensityLaw,
+    limits: &[(Level::Warning, 0.1)],
+    level: Level::Warning,
+    basis: Basis {
+        compares: "The temperature by which rising fluid cools as it expands (the adiabatic lapse over the height) with the span of temperatures. The Boussinesq energy equation leaves the work of pressure out.",
+        formula: "α g H T0 / (cp ΔT)",
+        source: "Gray and Giorgini, Int. J. Heat Mass Transfer 19 (1976) 545-551; Mihaljan, Astrophys. J. 136 (1962) 1126-1133",
+        remedy: "Let the solver compute the work of pressure (pressure-work on).",
+    },
+    run: Some(run),
+};
+
+/// Its number; unknown where the work of pressure is computed, and so not left out.
+pub static NUMBER: Weighed = Weighed {
+    check: &CHECK,
+    symbol: "αgHT0/(cpΔT)",
+    value: |assessed, values| {
+        let is_computed = assessed.region.pressure_work.is_some_and(|stated| stated.value);
+        if is_computed { f64::NAN } else { PICK(values) }
+    },
+};
+
+const PICK: fn(&CriterionValues) -> f64 = |values| values.adiabatic_lapse;
+
+/// |α| g H T0 / (cp ΔT); `NaN` where nothing drives a flow.
+pub fn pressure_work(expansion: f64, gravity: f64, height: f64, reference: f64, heat_capacity: f64, span: f64) -> f64 {
+    if span > 0.0 { expansion.abs() * gravity * height * reference / (heat_capacity * span) } else { f64::NAN }
+}
+
+fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
+    NUMBER.findings(subject, weighing, |region, value, limit| Said {
+        message: format!(
+            "fluid that rises the {} m of {} cools by {} as it expands, {} of the {} that drive the flow; the Boussinesq energy equation leaves that out and is held to {}",
+            format_number(region.conditions.height),
+            region.region.name.text,
+            format_difference(value * region.bracket.span()),
+            format_number(value),
+            format_difference(region.bracket.span()),
+            format_number(limit),
+        ),
+        remedy: remedy::join(&[
+            Some("`pressure-work on`".to_string()),
+            Some(remedy::height_below(region.conditions.height, value, limit)),
+        ]),
+        fixes: region.region.pressure_work.map(|stated| switch_on(stated.place)).into_iter().collect(),
+    })
+}
+
+/// Turns a switch on: the last word of its statement, `off`.
+fn switch_on(place: crate::syntax::Place) -> Fix {
+    let span = Span::new(place.span.end.saturating_sub("off".len()).max(place.span.start), place.span.end);
+    Fix {
+        title: "Compute the work of pressure".to_string(),
+        edits: vec![Edit { file: place.file, span, text: "on".to_string() }],
+        sure: false,
+    }
+}

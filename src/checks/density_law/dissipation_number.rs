@@ -1,0 +1,56 @@
+//! `dissipation-number`: the heat of friction against the heat that is carried by convection.
+
+use super::assess::{Said, Weighed};
+use super::{criterion::CriterionValues, remedy};
+use crate::checks::{Basis, Check, Family, Subject, Weighing};
+use crate::quantity::display::format_number;
+use crate::syntax::{Finding, Level};
+
+/// The check.
+pub static CHECK: Check = Check {
+    name: "dissipation-number",
+    family: Family::DensityLaw,
+    limits: &[(Level::Warning, 0.1)],
+    level: Level::Warning,
+    basis: Basis {
+        compares: "The heat of friction of the buoyant flow with the heat that it carries. The Boussinesq energy equation leaves friction out.",
+        formula: "α g H / cp",
+        source: "Gray and Giorgini, Int. J. Heat Mass Transfer 19 (1976) 545-551; Gebhart, J. Fluid Mech. 14 (1962) 225-232",
+        remedy: "Let the solver compute the heat of friction (viscous-heating on).",
+    },
+    run: Some(run),
+};
+
+/// Its number; unknown where the heat of friction is computed, and so not left out.
+pub static NUMBER: Weighed = Weighed {
+    check: &CHECK,
+    symbol: "αgH/cp",
+    value: |assessed, values| {
+        let is_computed = assessed.region.viscous_heating.is_some_and(|stated| stated.value);
+        if is_computed { f64::NAN } else { PICK(values) }
+    },
+};
+
+const PICK: fn(&CriterionValues) -> f64 = |values| values.dissipation_number;
+
+/// |α| g H / cp.
+pub fn dissipation(expansion: f64, gravity: f64, height: f64, heat_capacity: f64) -> f64 {
+    expansion.abs() * gravity * height / heat_capacity
+}
+
+fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
+    NUMBER.findings(subject, weighing, |region, value, limit| Said {
+        message: format!(
+            "αgH/cp is {} over the {} m of {}: the heat of friction is no longer small; the Boussinesq energy equation leaves it out and is held to {}",
+            format_number(value),
+            format_number(region.conditions.height),
+            region.region.name.text,
+            format_number(limit),
+        ),
+        remedy: remedy::join(&[
+            Some("`viscous-heating on`".to_string()),
+            Some(remedy::height_below(region.conditions.height, value, limit)),
+        ]),
+        fixes: Vec::new(),
+    })
+}
