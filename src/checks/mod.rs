@@ -1,7 +1,12 @@
 //! The checks, one file each, and the list of them.
 
 pub mod check;
+pub mod closure;
 pub mod list;
+pub mod look;
+pub mod record;
+pub mod regime;
+pub mod resolution;
 pub mod units;
 pub mod writing;
 

@@ -1,0 +1,61 @@
+//! `symmetry-across-gravity`: a mirror plane that gravity points through.
+
+use super::parts::{Role, role};
+use super::sides::{covered_by, word};
+use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
+use crate::checks::look::{finding_of, is_fluid, region_of};
+use crate::syntax::{Finding, Level};
+
+/// Sine of the angle that a mirror plane may make with gravity: rounding of a vector in a deck.
+const SLIGHT: f64 = 0.01;
+
+/// The check.
+pub const CHECK: Check = Check {
+    name: "symmetry-across-gravity",
+    family: Family::Closure,
+    limits: &[],
+    level: Level::Error,
+    basis: Basis {
+        compares: "Holds the direction of gravity against each mirror plane.",
+        formula: "n·g, which is 0 for a mirror plane; n is normal to it",
+        source: "a mirror turns the component of the buoyancy force normal to it around, so the equations are symmetric only about planes \
+                 that hold gravity: common practice",
+        remedy: "Model the whole, or mirror it about an upright plane.",
+    },
+    run: Some(run),
+};
+
+fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
+    let gravity = &subject.case.gravity;
+    if !(gravity.magnitude > 0.0) {
+        return Vec::new();
+    }
+    let mut findings = Vec::new();
+    for boundary in subject.case.boundaries.iter().filter(|boundary| role(boundary) == Role::Symmetry) {
+        let Some((region, physics)) = region_of(subject, boundary) else { continue };
+        if !is_fluid(region) {
+            continue;
+        }
+        let across = covered_by(subject.case, region, boundary).into_iter().find(|side| {
+            physics.geometry.sides.iter().any(|of| of.side == *side && dot(of.normal, gravity.direction).abs() > SLIGHT)
+        });
+        if let Some(side) = across {
+            let message = format!(
+                "`{}` is a mirror plane on the side `{}`, and gravity points through it: buoyancy has no such symmetry.",
+                boundary.name.text,
+                word(side)
+            );
+            let finding = finding_of(CHECK.name, weighing.level, &boundary.name, message)
+                .remedy("the whole height without a mirror, or a mirror on an upright side");
+            findings.push(match gravity.place {
+                Some(place) => finding.related(place, "gravity"),
+                None => finding,
+            });
+        }
+    }
+    findings
+}
+
+fn dot(one: [f64; 3], other: [f64; 3]) -> f64 {
+    one.iter().zip(&other).map(|(a, b)| a * b).sum()
+}

@@ -1,0 +1,1 @@
+//! What the deck records: requirements, waivers, and what rests on estimates.
