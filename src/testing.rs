@@ -156,3 +156,25 @@ pub fn expect(text: &str) {
     let wrong = differences(&analyse_text(text, TODAY));
     assert!(wrong.is_empty(), "\n{}\n", wrong.join("\n"));
 }
+
+/// Fails where a text's findings of one check differ from its marks.
+#[track_caller]
+pub fn expect_of(check: &str, text: &str) {
+    let mut deck = analyse_text(text, TODAY);
+    deck.findings.retain(|finding| finding.check == check);
+    let wrong = differences(&deck);
+    assert!(wrong.is_empty(), "\n{}\n", wrong.join("\n"));
+}
+
+/// The text after the first fix of the first finding of a check; the text itself where there is none.
+pub fn after_fix(check: &str, text: &str) -> String {
+    let mut mended = text.to_string();
+    let found = findings(text);
+    let fix = found.iter().filter(|finding| finding.check == check).find_map(|finding| finding.fixes.first());
+    let mut edits = fix.map(|fix| fix.edits.clone()).unwrap_or_default();
+    edits.sort_by_key(|edit| std::cmp::Reverse(edit.span.start));
+    for edit in edits {
+        mended.replace_range(edit.span.start..edit.span.end, &edit.text);
+    }
+    mended
+}

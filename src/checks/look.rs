@@ -23,6 +23,11 @@ pub fn is_fluid(region: &Region) -> bool {
     region.filled_with.is_some()
 }
 
+/// Whether gravity acts. Unknown gravity does not count.
+pub fn gravity_acts(case: &Case) -> bool {
+    case.gravity.magnitude > 0.0
+}
+
 /// Whether the run seeks a steady state.
 pub fn is_steady(case: &Case) -> bool {
     case.run.as_ref().is_some_and(|run| run.steady.is_some() && run.transient.is_none())

@@ -17,6 +17,7 @@ use crate::syntax::{Finding, Level};
 pub use crate::testing;
 pub use check::{Basis, Check, Family, Subject, Weighing};
 pub use list::CHECKS;
+pub use record::apply_waivers;
 
 /// The check of a name.
 pub fn find(name: &str) -> Option<&'static Check> {
@@ -63,11 +64,6 @@ pub fn at_practice_level(findings: Vec<Finding>, practice: &Practice) -> Vec<Fin
             }
         })
         .collect()
-}
-
-/// Sets aside what waivers cover.
-pub fn apply_waivers(_case: &Case, findings: Vec<Finding>, _today: &str) -> Vec<Finding> {
-    findings
 }
 
 /// The highest level among findings that no waiver covers.

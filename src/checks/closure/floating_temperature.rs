@@ -54,3 +54,83 @@ pub fn floating<'a>(subject: &Subject<'a>) -> Vec<Network<'a>> {
         |network: &Network<'_>| !network.has_given_temperature(subject) && !network.is_unfinished(subject);
     networks(subject).into_iter().filter(is_floating).collect()
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn nothing_is_given() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region room  #! floating-temperature "`room`"
+    box 1 m by 2 m by 3 m
+    filled with a
+boundary all_round of room
+    side remaining
+    insulated
+run
+    steady
+"##,
+        );
+    }
+
+    #[test]
+    fn a_neighbour_that_exchanges() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+solid brick
+    conductivity 0.8 W/m/K
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+boundary inside of room
+    side west
+    meets masonry
+boundary rest of room
+    side remaining
+    insulated
+region masonry
+    box 0.2 m by 2 m by 3 m
+    made of brick
+boundary outside of masonry
+    side west
+    exchanges 20 W/m^2/K with 0 degC
+boundary back of masonry
+    side east
+    meets room
+boundary rim of masonry
+    side remaining
+    insulated
+run
+    steady
+"##,
+        );
+    }
+
+    #[test]
+    fn in_time_the_start_settles_it() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+boundary all_round of room
+    side remaining
+    insulated
+run
+    transient for 1 h step 1 s
+"##,
+        );
+    }
+}

@@ -64,3 +64,84 @@ fn state_gravity(case: &Case) -> Fix {
     let edit = Edit { file: case.place.file, span: start, text: format!("case\n    {STATEMENT}\n\n") };
     Fix { title: format!("Add `{STATEMENT}`"), edits: vec![edit], sure: true }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn no_word_of_gravity() {
+        expect_of(
+            CHECK.name,
+            r##"
+case "Room"  #! gravity-missing "`a` falls with temperature"
+    ambient 20 degC
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+"##,
+        );
+    }
+
+    #[test]
+    fn no_gravity_at_all() {
+        expect_of(
+            CHECK.name,
+            r##"
+case
+    gravity none  #! gravity-missing "drives nothing"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+"##,
+        );
+    }
+
+    #[test]
+    fn nothing_buoyant() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+    density-law constant
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_states_it() {
+        let text = r##"
+case "Room"
+    ambient 20 degC
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+"##;
+        let mended = r##"
+case "Room"
+    gravity 9.81 m/s^2 along -z
+    ambient 20 degC
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+"##;
+        assert_eq!(after_fix(CHECK.name, text), mended);
+    }
+}

@@ -2,7 +2,7 @@
 
 use crate::case::model::{Axis, Region, Shape};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
-use crate::checks::look::{finding_of, is_fluid};
+use crate::checks::look::{finding_of, gravity_acts, is_fluid};
 use crate::quantity::display::format_number;
 use crate::syntax::{Finding, Level};
 
@@ -23,6 +23,9 @@ pub const CHECK: Check = Check {
 
 fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     let gravity = &subject.case.gravity;
+    if !gravity_acts(subject.case) {
+        return Vec::new();
+    }
     let mut findings = Vec::new();
     for region in subject.case.regions.iter().filter(|region| is_fluid(region)) {
         let Some((axis, plane)) = normal_of_plane(region) else { continue };
@@ -33,9 +36,6 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             Axis::Z => z,
         }
         .abs();
-        if !(gravity.magnitude > 0.0) {
-            continue;
-        }
         let Some((level, _)) = weighing.over(out_of_plane) else { continue };
         let share = if out_of_plane > 0.999 {
             "Gravity points".into()
@@ -80,5 +80,70 @@ fn normal_of_plane(region: &Region) -> Option<(Axis, &'static str)> {
             Axis::Z => (Axis::Z, "x and y"),
         }),
         _ => None,
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn gravity_along_y() {
+        expect_of(
+            CHECK.name,
+            r##"
+case
+    gravity 9.81 m/s^2 along -y
+fluid a
+    substance air
+region slab  #! gravity-out-of-plane "points out of the plane"
+    box 1 m by 2 m
+    filled with a
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+"##,
+        );
+    }
+
+    #[test]
+    fn partly() {
+        expect_of(
+            CHECK.name,
+            r##"
+case
+    gravity 9.81 m/s^2 along (0, 1, -1)
+fluid a
+    substance air
+region slab  #! gravity-out-of-plane "71 %"
+    box 1 m by 2 m
+    filled with a
+region ring  #! gravity-out-of-plane
+    annulus 0.1 m by 0.2 m
+    axis z
+    filled with a
+"##,
+        );
+    }
+
+    #[test]
+    fn in_the_plane() {
+        expect_of(
+            CHECK.name,
+            r##"
+case
+    gravity 9.81 m/s^2 along (1, 0, -1)
+fluid a
+    substance air
+region slab
+    box 1 m by 2 m
+    filled with a
+region ring
+    annulus 0.1 m by 0.2 m
+    axis y
+    filled with a
+"##,
+        );
     }
 }

@@ -51,3 +51,58 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn more_in_than_out() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region room  #! heat-imbalance "100 W of heat goes into `room` and 60 W comes out"
+    box 1 m by 2 m by 3 m
+    filled with a
+boundary heater of room
+    side west
+    heated by 100 W
+boundary cooler of room
+    side east
+    cooled by 60 W
+boundary rest of room
+    side remaining
+    insulated
+run
+    steady
+"##,
+        );
+    }
+
+    #[test]
+    fn a_source_that_a_wall_takes_up() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+source lamp in room
+    releases 60 W
+boundary cooler of room
+    side east
+    cooled by 60 W
+boundary rest of room
+    side remaining
+    insulated
+run
+    steady
+"##,
+        );
+    }
+}

@@ -121,3 +121,79 @@ fn rates_differ(
             .weighing(share.margin("|ṁ_in − ṁ_out| / max(ṁ_in, ṁ_out)", limit)),
     )
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn no_way_out() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary vent of room  #! mass-imbalance "can leave nowhere"
+    side west
+    inlet
+    enters at 0.2 m/s
+    carries 20 degC
+boundary rest of room
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn no_way_in() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary grille of room  #! mass-imbalance "enters nowhere"
+    side west
+    outlet
+boundary rest of room
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn both_ways() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary vent of room
+    side west
+    inlet
+    enters at 0.2 m/s
+    carries 20 degC
+boundary grille of room
+    side east
+    outlet
+"##,
+        );
+    }
+}

@@ -63,3 +63,90 @@ fn of_boundary(subject: &Subject<'_>, boundary: &Boundary, level: Level) -> Opti
         None => finding.remedy("`backflow` with the temperature outside"),
     })
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn openings() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary door of room  #! no-backflow-temperature "may enter at `door`"
+    side west
+    opening
+boundary hatch of room
+    side top
+    opening
+    backflow 20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn outlets() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary door of room  #! no-backflow-temperature "back in at the outlet `door`"
+    side west
+    outlet
+boundary hatch of room
+    side top
+    inlet
+    enters at 0.1 m/s
+    carries 20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_takes_ambient() {
+        let text = r##"
+case
+    ambient 8 degC
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary door of room
+    side west
+    opening
+"##;
+        let mended = r##"
+case
+    ambient 8 degC
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary door of room
+    backflow 8 degC
+    side west
+    opening
+"##;
+        assert_eq!(after_fix(CHECK.name, text), mended);
+    }
+}

@@ -36,3 +36,45 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn no_law() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a  #! no-density-law
+    substance air
+fluid spare
+    substance air
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_takes_the_linear_one() {
+        let text = r##"
+fluid a
+    substance air
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+"##;
+        let mended = r##"
+fluid a
+    density-law boussinesq
+    substance air
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+"##;
+        assert_eq!(after_fix(CHECK.name, text), mended);
+    }
+}

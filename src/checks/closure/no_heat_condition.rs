@@ -74,3 +74,130 @@ fn with_ambient(finding: Finding, boundary: &Boundary, word: &str, ambient: Opti
         None => finding,
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn bare_walls_and_inlets() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary west_wall of room  #! no-heat-condition "the wall `west_wall`"
+    side west
+    wall
+boundary vent of room  #! no-heat-condition "enters at `vent`"
+    side top
+    inlet
+    enters at 0.2 m/s
+boundary nothing of room  #! no-heat-condition "neither what it is"
+    side east
+boundary rest of room
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn complete_ones() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary west_wall of room
+    side west
+    held at 40 degC
+boundary vent of room
+    side top
+    inlet
+    enters at 0.2 m/s
+    carries 18 degC
+boundary grille of room
+    side east
+    outlet
+boundary mirror of room
+    side south
+    symmetry
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_insulates() {
+        let text = r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary west_wall of room
+    side west
+    wall
+"##;
+        let mended = r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary west_wall of room
+    insulated
+    side west
+    wall
+"##;
+        assert_eq!(after_fix(CHECK.name, text), mended);
+    }
+
+    #[test]
+    fn an_inlet_that_is_held() {
+        let text = r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary vent of room
+    side top
+    inlet
+    enters at 0.2 m/s
+    held at 18 degC
+"##;
+        let mended = r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary vent of room
+    side top
+    inlet
+    enters at 0.2 m/s
+    carries 18 degC
+"##;
+        assert_eq!(after_fix(CHECK.name, text), mended);
+    }
+}

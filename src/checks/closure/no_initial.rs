@@ -60,3 +60,83 @@ fn of_region(case: &Case, region: &Region, level: Level) -> Finding {
     }
     finding
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn where_it_starts() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region room  #! no-initial "how warm `room` is"
+    box 1 m by 2 m by 3 m
+    filled with a
+region hall
+    box 1 m by 2 m by 3 m
+    filled with a
+initial hall
+    stratified from 18 degC to 24 degC
+run
+    transient for 1 h step 1 s
+"##,
+        );
+    }
+
+    #[test]
+    fn steady_needs_none() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+run
+    steady
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_starts_from_ambient() {
+        let text = r##"
+case
+    ambient 8 degC
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+run
+    transient for 1 h step 1 s
+"##;
+        let mended = r##"
+case
+    ambient 8 degC
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+initial room
+    temperature  8 degC
+    at rest
+
+run
+    transient for 1 h step 1 s
+"##;
+        assert_eq!(after_fix(CHECK.name, text), mended);
+    }
+}

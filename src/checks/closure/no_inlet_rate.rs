@@ -34,3 +34,34 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         })
         .collect()
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn how_fast() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary vent of room  #! no-inlet-rate
+    side west
+    inlet
+    carries 20 degC
+boundary stack of room
+    side top
+    inlet
+    gauge 2 Pa
+    carries 20 degC
+"##,
+        );
+    }
+}

@@ -70,3 +70,79 @@ fn of_fluid(case: &Case, fluid: &Fluid, level: Level) -> Option<Finding> {
             .related(law.place, "its density law")
     })
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn all_rates_given() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+    density-law boussinesq
+region room  #! no-pressure-level "Every opening"
+    box 1 m by 2 m by 3 m
+    filled with a
+boundary vent of room
+    side west
+    inlet
+    enters at 0.1 m^3/s
+    carries 20 degC
+boundary grille of room
+    side east
+    outlet
+    enters at 0.1 m^3/s
+"##,
+        );
+    }
+
+    #[test]
+    fn a_gas_at_no_pressure() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a  #! no-pressure-level "101.3 kPa"
+    substance air
+    density-law ideal-gas
+fluid b
+    substance water
+    density-law variable
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+region tank
+    box 1 m by 2 m by 3 m
+    filled with b
+"##,
+        );
+    }
+
+    #[test]
+    fn pressure_given() {
+        expect_of(
+            CHECK.name,
+            r##"
+case
+    ambient 20 degC at 1 bar
+fluid a
+    substance air
+    density-law ideal-gas
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+boundary vent of room
+    side west
+    inlet
+    enters at 0.1 m^3/s
+    carries 20 degC
+boundary grille of room
+    side east
+    outlet
+"##,
+        );
+    }
+}

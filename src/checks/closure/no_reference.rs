@@ -47,3 +47,37 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn no_reference() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a  #! no-reference
+    substance air
+    density-law boussinesq
+fluid b
+    substance air
+    reference 20 degC at 1 bar
+    density-law boussinesq
+fluid c
+    substance air
+    density-law ideal-gas
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+region hall
+    box 1 m by 2 m by 3 m
+    filled with b
+region attic
+    box 1 m by 2 m by 3 m
+    filled with c
+"##,
+        );
+    }
+}

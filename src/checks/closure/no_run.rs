@@ -47,3 +47,87 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         _ => Vec::new(),
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn neither() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room
+    side remaining
+    insulated
+run  #! no-run "neither"
+    time-stepping implicit
+"##,
+        );
+    }
+
+    #[test]
+    fn both() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room
+    side remaining
+    insulated
+run
+    steady  #! no-run "at once"
+    transient for 1 h step 1 s
+"##,
+        );
+    }
+
+    #[test]
+    fn no_entry() {
+        expect_of(
+            CHECK.name,
+            r##"
+case "Room"  #! no-run
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn materials_alone() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+"##,
+        );
+    }
+}

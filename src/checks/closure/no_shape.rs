@@ -30,3 +30,25 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn no_size() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region room  #! no-shape
+    filled with a
+region hall
+    box 1 m by 2 m by 3 m
+    filled with a
+"##,
+        );
+    }
+}

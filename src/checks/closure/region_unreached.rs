@@ -74,3 +74,54 @@ fn meeting_themselves(case: &Case) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn apart_from_the_rest() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+solid brick
+    conductivity 0.8 W/m/K
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+boundary inside of room
+    side west
+    meets masonry
+region masonry
+    box 0.2 m by 2 m by 3 m
+    made of brick
+boundary itself of masonry
+    side east
+    meets masonry  #! region-unreached "meets it again"
+region shelf  #! region-unreached "`shelf` shares no face"
+    box 0.2 m by 2 m by 3 m
+    made of brick
+"##,
+        );
+    }
+
+    #[test]
+    fn cases_of_their_own() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+region hall
+    box 1 m by 2 m by 3 m
+    filled with a
+"##,
+        );
+    }
+}

@@ -110,3 +110,93 @@ fn name_back(boundary: &Boundary, partner: &Boundary) -> Option<Fix> {
         Fix { title: format!("Add `{statement}` to `{}`", partner.name.text), edits: vec![edit], sure: true }
     })
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn pairs_that_do_not_fit() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room
+    side west
+    repeats with two  #! repeat-unpaired "`two` does not repeat with `one`"
+boundary two of room
+    side east
+    repeats with three  #! repeat-unpaired
+boundary three of room
+    side south
+    repeats with two  #! repeat-unpaired "does not face it"
+boundary four of room
+    side top
+    repeats with four  #! repeat-unpaired "itself"
+"##,
+        );
+    }
+
+    #[test]
+    fn a_pair() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room
+    side west
+    repeats with two
+boundary two of room
+    side east
+    repeats with one
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_names_it_back() {
+        let text = r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room
+    side west
+    repeats with two
+boundary two of room
+    side east
+"##;
+        let mended = r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room
+    side west
+    repeats with two
+boundary two of room
+    repeats with one
+    side east
+"##;
+        assert_eq!(after_fix(CHECK.name, text), mended);
+    }
+}

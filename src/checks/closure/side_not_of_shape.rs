@@ -69,3 +69,58 @@ fn shape_in_words(region: &Region) -> &'static str {
         None => "without a shape",
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn sides_that_are_not_there() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region slab
+    box 1 m by 2 m
+    filled with a
+boundary one of slab
+    side west, south  #! side-not-of-shape "plane case"
+    insulated
+region ball
+    sphere 0.1 m
+    surrounded by a
+boundary skin of ball
+    side around  #! side-not-of-shape "body in a wide fluid"
+    held at 40 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn sides_that_are() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region tank
+    cylinder 1 m by 2 m
+    filled with a
+boundary mantle of tank
+    side around, bottom, top
+    insulated
+region ball
+    sphere 0.1 m
+    surrounded by a
+boundary skin of ball
+    side face
+    held at 40 degC
+boundary air_around of ball
+    side far
+    held at 20 degC
+"##,
+        );
+    }
+}

@@ -107,3 +107,80 @@ fn nothing_remains(case: &Case, region: &Region) -> Option<Finding> {
             .remedy("leave the boundary out, or free the sides that it is meant for")
     })
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn twice() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room
+    side west, east
+    insulated
+boundary two of room
+    side east  #! side-twice "Both `one` and `two`"
+    insulated
+boundary three of room
+    side top, top  #! side-twice "twice"
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn nothing_remains() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region slab
+    box 1 m by 2 m
+    filled with a
+boundary one of slab
+    side west, east, bottom, top
+    insulated
+boundary rest of slab
+    side remaining  #! side-twice "Nothing remains"
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn a_patch_beside_the_rest() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary heater of room
+    side west
+    patch 0.2 m by 0.3 m
+    held at 40 degC
+boundary wall_behind of room
+    side west
+    insulated
+boundary rest of room
+    side remaining
+    insulated
+"##,
+        );
+    }
+}

@@ -80,7 +80,8 @@ fn is_covered(case: &Case, region: &Region, physics: &RegionPhysics, side: Side)
     // Patches that make up the whole side. An unknown area is given the benefit of the doubt.
     let parts = parts_of(case, region, side);
     let whole = area_of_side(physics, side);
-    !parts.is_empty() && !(parts.iter().sum::<f64>() < 0.99 * whole)
+    let falls_short = parts.iter().sum::<f64>() < 0.99 * whole;
+    !parts.is_empty() && !falls_short
 }
 
 fn parts_of(case: &Case, region: &Region, side: Side) -> Vec<f64> {
@@ -98,5 +99,116 @@ fn part_of(case: &Case, region: &Region, physics: &RegionPhysics, open: &str) ->
         format!(" beyond {} of its {}", format_si(covered, AREA), format_si(whole, AREA))
     } else {
         String::new()
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn sides_left_over() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region room  #! side-unassigned "`south`, `north` and `top`"
+    box 1 m by 2 m by 3 m
+    filled with a
+boundary one of room
+    side west, east, bottom
+    insulated
+region bare  #! side-unassigned "has no boundary"
+    box 1 m by 2 m
+    filled with a
+region pipe  #! side-unassigned "`far`"
+    cylinder 50 mm by 2 m
+    axis x
+    surrounded by a
+boundary skin of pipe
+    side face
+    held at 60 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn all_covered() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+boundary one of room
+    side west
+    insulated
+boundary rest of room
+    side remaining
+    insulated
+region pane
+    gap 16 mm by 1.2 m
+    filled with a
+boundary warm of pane
+    side west
+    held at 20 degC
+boundary cold of pane
+    side east
+    held at 0 degC
+region ring
+    annulus 50 mm by 120 mm by 1 m
+    filled with a
+boundary inner_one of ring
+    side inner
+    held at 20 degC
+boundary outer_one of ring
+    side outer
+    held at 0 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_adds_a_boundary() {
+        let text = r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room
+    side west
+    insulated
+
+run
+    steady
+"##;
+        let mended = r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room
+    side west
+    insulated
+
+boundary rest_of_room of room
+    side       remaining
+    wall
+    insulated
+
+run
+    steady
+"##;
+        assert_eq!(after_fix(CHECK.name, text), mended);
     }
 }

@@ -3,7 +3,7 @@
 use super::parts::{Role, role};
 use super::sides::{covered_by, word};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
-use crate::checks::look::{finding_of, is_fluid, region_of};
+use crate::checks::look::{finding_of, gravity_acts, is_fluid, region_of};
 use crate::syntax::{Finding, Level};
 
 /// Sine of the angle that a mirror plane may make with gravity: rounding of a vector in a deck.
@@ -27,7 +27,7 @@ pub const CHECK: Check = Check {
 
 fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     let gravity = &subject.case.gravity;
-    if !(gravity.magnitude > 0.0) {
+    if !gravity_acts(subject.case) {
         return Vec::new();
     }
     let mut findings = Vec::new();
@@ -58,4 +58,51 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
 
 fn dot(one: [f64; 3], other: [f64; 3]) -> f64 {
     one.iter().zip(&other).map(|(a, b)| a * b).sum()
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn mirrors() {
+        expect_of(
+            CHECK.name,
+            r##"
+case
+    gravity 9.81 m/s^2 along -z
+fluid a
+    substance air
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+boundary ceiling of room  #! symmetry-across-gravity "`top`"
+    side top
+    symmetry
+boundary middle of room
+    side south
+    symmetry
+"##,
+        );
+    }
+
+    #[test]
+    fn without_gravity() {
+        expect_of(
+            CHECK.name,
+            r##"
+case
+    gravity none
+fluid a
+    substance air
+region room
+    box 1 m by 2 m by 3 m
+    filled with a
+boundary ceiling of room
+    side top
+    symmetry
+"##,
+        );
+    }
 }

@@ -34,3 +34,33 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn two_kinds() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room  #! two-boundary-kinds "both `wall` and `outlet`"
+    side west
+    wall
+    outlet
+boundary two of room
+    side east
+    wall
+    insulated
+"##,
+        );
+    }
+}

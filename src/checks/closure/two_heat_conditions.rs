@@ -64,3 +64,66 @@ fn contradict(one: &Heat, other: &Heat) -> bool {
     let cools = |heat: &Heat| matches!(heat, Heat::CooledBy(_));
     settles(one) || settles(other) || (heats(one) && cools(other)) || (cools(one) && heats(other))
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn contradictions() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room  #! two-heat-conditions "`held at` and `heated by`"
+    side west
+    held at 40 degC
+    heated by 100 W
+boundary two of room  #! two-heat-conditions
+    side east
+    insulated
+    exchanges 6 W/m^2/K with 8 degC
+boundary three of room  #! two-heat-conditions
+    side south
+    heated by 10 W
+    cooled by 5 W
+boundary four of room  #! two-heat-conditions "mirror"
+    side north
+    symmetry
+    held at 20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn heat_flows_that_add_up() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    density-law  boussinesq
+region room
+    box          1 m by 2 m by 3 m
+    filled with  a
+
+boundary one of room
+    side west
+    heated by 100 W
+    exchanges 6 W/m^2/K with 8 degC
+    radiates to -40 degC
+boundary two of room
+    side north
+    symmetry
+    insulated
+"##,
+        );
+    }
+}

@@ -56,3 +56,49 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn nothing_or_two_things() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+solid brick
+    conductivity 0.8 W/m/K
+region room  #! unfilled-region "Nothing says"
+    box 1 m by 2 m by 3 m
+region hall  #! unfilled-region "both"
+    box 1 m by 2 m by 3 m
+    filled with a
+    made of brick
+region masonry
+    box 1 m by 2 m by 3 m
+    made of brick
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_fills_it() {
+        let text = r##"
+fluid a
+    substance air
+region room
+    box 1 m by 2 m by 3 m
+"##;
+        let mended = r##"
+fluid a
+    substance air
+region room
+    filled with  a
+    box 1 m by 2 m by 3 m
+"##;
+        assert_eq!(after_fix(CHECK.name, text), mended);
+    }
+}
