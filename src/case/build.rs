@@ -4,7 +4,7 @@ use super::bind::{Bound, BoundEntry, BoundStatement, BoundValue};
 use super::compiled::{Compiled, Variable};
 use super::model::{
     Axis, Boundary, BoundaryKind, Case, DensityLaw, Flow, Fluid, Given, Gravity, Heat, Initial, Mesh, Name, Practice,
-    Radiation, Region, Run, Shape, Side, Solid, Source, Stated, Value, Waiver,
+    Radiation, Region, Requirement, Run, Shape, Side, Solid, Source, Stated, Value, Waiver,
 };
 use super::resolution::Resolution;
 use crate::syntax::Place;
@@ -131,11 +131,25 @@ pub fn build(resolution: &Resolution, point: &Point) -> Case {
         })
         .collect();
     case.substances.clone_from(&resolution.substances);
-    case.requirements.clone_from(&resolution.requirements);
+    case.requirements = resolution.requirements.iter().map(|requirement| at_point(requirement, point)).collect();
     for entry in &resolution.entries {
         add(&mut case, Reader { entry, point });
     }
     case
+}
+
+/// A requirement with the values of the deck's names put in; only numbers of regions are left open.
+fn at_point(requirement: &Requirement, point: &Point) -> Requirement {
+    let known = |variable: &Variable| match variable {
+        Variable::Given(_) | Variable::Deviation(_) => Some(point.evaluate(&Compiled::Variable(variable.clone()))),
+        _ => None,
+    };
+    Requirement {
+        left: requirement.left.settled(&known),
+        right: requirement.right.settled(&known),
+        upper: requirement.upper.as_ref().map(|upper| upper.settled(&known)),
+        ..requirement.clone()
+    }
 }
 
 fn add(case: &mut Case, reader: Reader<'_>) {

@@ -125,6 +125,21 @@ impl Compiled {
         }
     }
 
+    /// The same with the variables that `known` gives put in as numbers.
+    pub fn settled(&self, known: &dyn Fn(&Variable) -> Option<f64>) -> Compiled {
+        let settle = |inner: &Compiled| Box::new(inner.settled(known));
+        match self {
+            Compiled::Constant(value) => Compiled::Constant(*value),
+            Compiled::Variable(which) => known(which).map_or_else(|| self.clone(), Compiled::Constant),
+            Compiled::Negative(inner) => Compiled::Negative(settle(inner)),
+            Compiled::Binary(operation, left, right) => Compiled::Binary(*operation, settle(left), settle(right)),
+            Compiled::Function(function, inner) => Compiled::Function(*function, settle(inner)),
+            Compiled::Extreme { greatest, of } => {
+                Compiled::Extreme { greatest: *greatest, of: of.iter().map(|inner| inner.settled(known)).collect() }
+            }
+        }
+    }
+
     /// Calls `visit` with every variable it depends on.
     pub fn variables(&self, visit: &mut dyn FnMut(&Variable)) {
         match self {

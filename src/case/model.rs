@@ -490,7 +490,7 @@ pub struct Requirement {
     pub file: FileId,
     /// The offset of its entry in the file: the spans of its expressions count from there.
     pub offset: usize,
-    /// Left side.
+    /// Left side; of the deck's names their values are put in, so that only numbers of regions are left open.
     pub left: Compiled,
     /// Comparison.
     pub comparison: Comparison,

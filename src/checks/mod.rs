@@ -1,9 +1,14 @@
 //! The checks, one file each, and the list of them.
 
 pub mod check;
+pub mod closure;
 pub mod density_law;
 pub mod list;
+pub mod look;
 pub mod properties;
+pub mod record;
+pub mod regime;
+pub mod resolution;
 pub mod units;
 pub mod writing;
 
@@ -14,6 +19,7 @@ use crate::syntax::{Finding, Level};
 pub use crate::testing;
 pub use check::{Basis, Check, Family, Subject, Weighing};
 pub use list::CHECKS;
+pub use record::apply_waivers;
 
 /// The check of a name.
 pub fn find(name: &str) -> Option<&'static Check> {
@@ -60,11 +66,6 @@ pub fn at_practice_level(findings: Vec<Finding>, practice: &Practice) -> Vec<Fin
             }
         })
         .collect()
-}
-
-/// Sets aside what waivers cover.
-pub fn apply_waivers(_case: &Case, findings: Vec<Finding>, _today: &str) -> Vec<Finding> {
-    findings
 }
 
 /// The highest level among findings that no waiver covers.

@@ -1,0 +1,126 @@
+//! `side-not-of-shape`: a boundary on a side that the region's shape does not have.
+
+use super::sides::{sides_of, word};
+use crate::case::model::{Region, Shape, Side};
+use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
+use crate::checks::look::listed;
+use crate::syntax::{Finding, Level};
+
+/// The check.
+pub const CHECK: Check = Check {
+    name: "side-not-of-shape",
+    family: Family::Closure,
+    limits: &[],
+    level: Level::Error,
+    basis: Basis {
+        compares: "Holds the sides that each boundary names against those that the region's shape has.",
+        formula: "",
+        source: "the vocabulary of the language",
+        remedy: "One of the sides of the shape, or `remaining`.",
+    },
+    run: Some(run),
+};
+
+fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
+    let mut findings = Vec::new();
+    for region in &subject.case.regions {
+        let sides = sides_of(region);
+        if sides.is_empty() {
+            continue;
+        }
+        let words: Vec<&str> = sides.iter().map(|side| word(*side)).collect();
+        for boundary in subject.case.boundaries_of(region) {
+            for stated in &boundary.sides {
+                if stated.value == Side::Remaining || sides.contains(&stated.value) {
+                    continue;
+                }
+                let message = format!(
+                    "`{}` is {} and has no side `{}`.",
+                    region.name.text,
+                    shape_in_words(region),
+                    word(stated.value)
+                );
+                findings.push(
+                    Finding::new(CHECK.name, weighing.level, stated.place, message)
+                        .about(&*boundary.name.text)
+                        .remedy(format!("one of {}, or `remaining`", listed(&words)))
+                        .related(region.shape_place.unwrap_or(region.name.place), "its shape"),
+                );
+            }
+        }
+    }
+    findings
+}
+
+fn shape_in_words(region: &Region) -> &'static str {
+    match &region.shape {
+        Some(Shape::Plate { .. }) => "a plate in a wide fluid",
+        Some(_) if region.is_surrounded => "a body in a wide fluid",
+        Some(Shape::Box { y: None, .. }) => "a plane case in x and z",
+        Some(Shape::Box { .. }) => "a box",
+        Some(Shape::Cylinder { .. }) => "a cylinder",
+        Some(Shape::Sphere { .. }) => "a sphere",
+        Some(Shape::Annulus { length: None, .. }) => "an annulus without ends (a plane case)",
+        Some(Shape::Annulus { .. }) => "an annulus",
+        Some(Shape::Gap { depth: None, .. }) => "a gap without a width (a plane case)",
+        Some(Shape::Gap { .. }) => "a gap",
+        Some(Shape::Channel { depth: None, .. }) => "a channel without a width (a plane case)",
+        Some(Shape::Channel { .. }) => "a channel",
+        None => "without a shape",
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn sides_that_are_not_there() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region slab
+    box 1 m by 2 m
+    filled with a
+boundary one of slab
+    side west, south  #! side-not-of-shape "plane case"
+    insulated
+region ball
+    sphere 0.1 m
+    surrounded by a
+boundary skin of ball
+    side around  #! side-not-of-shape "body in a wide fluid"
+    held at 40 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn sides_that_are() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance air
+region tank
+    cylinder 1 m by 2 m
+    filled with a
+boundary mantle of tank
+    side around, bottom, top
+    insulated
+region ball
+    sphere 0.1 m
+    surrounded by a
+boundary skin of ball
+    side face
+    held at 40 degC
+boundary air_around of ball
+    side far
+    held at 20 degC
+"##,
+        );
+    }
+}

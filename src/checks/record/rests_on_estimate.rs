@@ -1,0 +1,62 @@
+//! `rests-on-estimate`: temperatures of a region that are estimated, not given.
+
+use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
+use crate::checks::look::{celsius, finding_of, regions};
+use crate::physics::model::Bound;
+use crate::syntax::{Finding, Level};
+
+/// The check.
+pub const CHECK: Check = Check {
+    name: "rests-on-estimate",
+    family: Family::Record,
+    limits: &[],
+    level: Level::Hint,
+    basis: Basis {
+        compares: "Says which ends of the temperatures of a region are estimated, by what, and with which band. Outside the published range \
+                   of the correlation it is an information.",
+        formula: "",
+        source: "the correlation or balance that the finding names",
+        remedy: "Hold the estimate against a measurement or a finer method where a verdict depends on it.",
+    },
+    run: Some(run),
+};
+
+fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
+    let mut findings = Vec::new();
+    for (region, physics) in regions(subject) {
+        let Some(bracket) = &physics.bracket else { continue };
+        let ends = [("lowest", &bracket.lowest), ("highest", &bracket.highest)];
+        let parts: Vec<String> = ends.iter().filter_map(|(which, bound)| in_words(which, bound)).collect();
+        if parts.is_empty() {
+            continue;
+        }
+        let numbers = &physics.numbers;
+        let is_outside = numbers.nusselt.is_finite() && !numbers.nusselt_inside_range;
+        let (level, note) = if is_outside {
+            (Level::Information.max(weighing.level), " The correlation is used outside its published range.")
+        } else {
+            (weighing.level, "")
+        };
+        let message = format!("In `{}` {}.{note}", region.name.text, parts.join(", and "));
+        findings.push(
+            finding_of(CHECK.name, level, &region.name, message)
+                .remedy("hold it against a measurement or a finer method where a verdict depends on it"),
+        );
+    }
+    findings
+}
+
+fn in_words(which: &str, bound: &Bound) -> Option<String> {
+    let by = bound.estimate.as_ref()?;
+    let (low, high) = bound.band;
+    if !(bound.value.is_finite() && low.is_finite() && high.is_finite()) {
+        return None;
+    }
+    Some(format!(
+        "the {which} temperature is estimated: {} ({} to {}), {}, by {by}",
+        celsius(bound.value),
+        celsius(low),
+        celsius(high),
+        bound.set_by
+    ))
+}

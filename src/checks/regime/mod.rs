@@ -1,0 +1,1 @@
+//! Does the model suit the regime of the flow?

@@ -1,0 +1,1 @@
+//! Does the mesh resolve it, and the run last?
