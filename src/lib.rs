@@ -7,6 +7,7 @@ pub mod case;
 pub mod checks;
 pub mod physics;
 pub mod quantity;
+pub mod report;
 pub mod substances;
 pub mod syntax;
 #[doc(hidden)]
