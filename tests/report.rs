@@ -1,10 +1,12 @@
 //! The faces of a report, shown findings that are made by hand.
 
+use deckline::case::Resolution;
 use deckline::case::model::{Case, Name};
 use deckline::physics::model::Physics;
-use deckline::report::{Face, Options, Paint, Sheet, json, write};
+use deckline::report::{Face, Layout, Paint, Report, Sheet, Unreadable, json, write};
 use deckline::syntax::{FileId, Finding, Level, Margin, Place, Span, SweepPoints, parse};
 use deckline::workspace::deck::{Deck, SourceFile};
+use std::path::Path;
 use std::sync::Arc;
 
 const CABINET: &str = r#"# Instrument cabinet on the observing floor, fans off.
@@ -116,49 +118,55 @@ fn findings() -> Vec<Finding> {
 
 fn deck(path: &str, findings: Vec<Finding>) -> Sheet {
     let title = Name { text: "Instrument cabinet, natural cooling".into(), place: at(0, CABINET, "\"Instrument") };
-    Sheet::of(&Deck {
+    let deck = Deck {
         files: vec![file(path, CABINET), file("shared/materials.buoy", MATERIALS)],
+        resolution: Resolution::default(),
         case: Case { title: Some(title), ..Case::default() },
         physics: Physics::default(),
         findings,
-    })
+    };
+    Sheet::of(&deck, Path::new(""))
 }
 
-fn shown(sheets: &[Sheet], face: Face, options: &Options) -> String {
+fn shown(sheets: &[Sheet], face: Face, layout: Layout) -> String {
+    with_unreadable(sheets, face, layout, Vec::new())
+}
+
+fn with_unreadable(sheets: &[Sheet], face: Face, layout: Layout, unreadable: Vec<Unreadable>) -> String {
     let mut out = Vec::new();
-    write(sheets, face, &mut out, options).unwrap();
+    write(&Report::of(sheets.to_vec(), None, unreadable), face, &mut out, layout).unwrap();
     String::from_utf8(out).unwrap()
 }
 
 #[test]
 fn cards_at_80_columns() {
     let sheets = [deck("instrument-cabinet.buoy", findings())];
-    insta::assert_snapshot!(shown(&sheets, Face::Cards, &Options::default()));
+    insta::assert_snapshot!(shown(&sheets, Face::Cards, Layout::default()));
 }
 
 #[test]
 fn cards_at_40_columns() {
     let sheets = [deck("instrument-cabinet.buoy", findings())];
-    insta::assert_snapshot!(shown(&sheets, Face::Cards, &Options { width: 40, ..Options::default() }));
+    insta::assert_snapshot!(shown(&sheets, Face::Cards, Layout { width: 40, ..Layout::default() }));
 }
 
 #[test]
 fn cards_of_decks_that_share_a_file_say_it_once() {
     let units = || findings().into_iter().filter(|finding| finding.check == "dimension-mismatch").collect();
     let sheets = [deck("b.buoy", units()), deck("c.buoy", units()), deck("a.buoy", units())];
-    insta::assert_snapshot!(shown(&sheets, Face::Cards, &Options::default()));
+    insta::assert_snapshot!(shown(&sheets, Face::Cards, Layout::default()));
 }
 
 #[test]
 fn cards_of_a_sound_deck() {
-    insta::assert_snapshot!(shown(&[deck("a.buoy", Vec::new())], Face::Cards, &Options::default()), @"1 deck checked: nothing to report.");
+    insta::assert_snapshot!(shown(&[deck("a.buoy", Vec::new())], Face::Cards, Layout::default()), @"1 deck checked: nothing to report.");
 }
 
 #[test]
 fn colour_adds_only_escape_sequences() {
     let sheets = [deck("instrument-cabinet.buoy", findings())];
-    let plain = shown(&sheets, Face::Cards, &Options::default());
-    let coloured = shown(&sheets, Face::Cards, &Options { paint: Paint::Coloured, ..Options::default() });
+    let plain = shown(&sheets, Face::Cards, Layout::default());
+    let coloured = shown(&sheets, Face::Cards, Layout { paint: Paint::Coloured, ..Layout::default() });
     assert!(coloured.contains("\u{1b}[") && !plain.contains('\u{1b}'));
     assert_eq!(anstream::adapter::strip_str(&coloured).to_string(), plain);
 }
@@ -166,8 +174,8 @@ fn colour_adds_only_escape_sequences() {
 #[test]
 fn no_card_is_wider_than_the_terminal() {
     let sheets = [deck("instrument-cabinet.buoy", findings())];
-    for width in [60, 80, 100, 120] {
-        for line in shown(&sheets, Face::Cards, &Options { width, ..Options::default() }).lines() {
+    for width in [80, 100, 120] {
+        for line in shown(&sheets, Face::Cards, Layout { width, ..Layout::default() }).lines() {
             assert!(unicode_width::UnicodeWidthStr::width(line) <= width, "{width}: {line}");
         }
     }
@@ -176,16 +184,19 @@ fn no_card_is_wider_than_the_terminal() {
 #[test]
 fn what_a_deck_quotes_cannot_reach_the_terminal() {
     let text = "case \"x\u{1b}[31m\"\n    gravity \u{1b}]0;owned\u{7}\n";
-    let mut finding = Finding::new("unreadable-line", Level::Error, at(0, text, "gravity"), "It says \u{1b}[2J here.\nTwo.");
+    let mut finding =
+        Finding::new("unreadable-line", Level::Error, at(0, text, "gravity"), "It says \u{1b}[2J here.\nTwo.");
     finding.remedy = "\u{9b}5A".into();
-    let sheet = Sheet::of(&Deck {
+    let deck = Deck {
         files: vec![file("a\u{1b}.buoy", text)],
+        resolution: Resolution::default(),
         case: Case::default(),
         physics: Physics::default(),
         findings: vec![finding],
-    });
+    };
+    let sheet = Sheet::of(&deck, Path::new(""));
     for face in [Face::Cards, Face::Lines] {
-        let said = shown(std::slice::from_ref(&sheet), face, &Options::default());
+        let said = shown(std::slice::from_ref(&sheet), face, Layout::default());
         assert!(!said.chars().any(|character| character.is_control() && character != '\n'), "{face:?}: {said:?}");
         if face == Face::Lines {
             assert_eq!(said.lines().count(), 1);
@@ -196,17 +207,18 @@ fn what_a_deck_quotes_cannot_reach_the_terminal() {
 #[test]
 fn lines() {
     let sheets = [deck("instrument-cabinet.buoy", findings())];
-    insta::assert_snapshot!(shown(&sheets, Face::Lines, &Options::default()));
+    insta::assert_snapshot!(shown(&sheets, Face::Lines, Layout::default()));
 }
 
-fn with_problem() -> Options {
-    Options { unreadable: vec![("bad.buoy".into(), "it is not UTF-8".into())], ..Options::default() }
+fn with_problem(sheets: &[Sheet], face: Face) -> String {
+    let bad = Unreadable { path: "bad.buoy".into(), message: "not UTF-8 text (line 2)".into() };
+    with_unreadable(sheets, face, Layout::default(), vec![bad])
 }
 
 #[test]
 fn json_says_everything_and_fits_its_schema() {
     let sheets = [deck("b.buoy", findings()), deck("instrument-cabinet.buoy", findings())];
-    let text = shown(&sheets, Face::Json, &with_problem());
+    let text = with_problem(&sheets, Face::Json);
     let value: serde_json::Value = serde_json::from_str(&text).unwrap();
     let schema = serde_json::to_value(json::schema()).unwrap();
     jsonschema::meta::validate(&schema).unwrap();
@@ -228,14 +240,15 @@ fn json_says_everything_and_fits_its_schema() {
 
 #[test]
 fn json_has_stable_names() {
-    let sheets = [deck("instrument-cabinet.buoy", findings().into_iter().filter(|one| one.check == "density-span").collect())];
-    insta::assert_snapshot!(shown(&sheets, Face::Json, &with_problem()).replace(env!("CARGO_PKG_VERSION"), "VERSION"));
+    let sheets =
+        [deck("instrument-cabinet.buoy", findings().into_iter().filter(|one| one.check == "density-span").collect())];
+    insta::assert_snapshot!(with_problem(&sheets, Face::Json).replace(env!("CARGO_PKG_VERSION"), "VERSION"));
 }
 
 #[test]
 fn sarif_fits_the_schema_of_the_standard() {
     let sheets = [deck("b.buoy", findings()), deck("decks/instrument cabinet.buoy", findings())];
-    let value: serde_json::Value = serde_json::from_str(&shown(&sheets, Face::Sarif, &with_problem())).unwrap();
+    let value: serde_json::Value = serde_json::from_str(&with_problem(&sheets, Face::Sarif)).unwrap();
     // The published pattern of a language has a stray bracket, which is no regular expression to a strict reader.
     let schema = include_str!("schemas/sarif-2.1.0.json").replace("-[a-zA-Z]{2}]?$", "-[a-zA-Z]{2}$");
     let schema: serde_json::Value = serde_json::from_str(&schema).unwrap();
@@ -255,10 +268,12 @@ fn sarif_fits_the_schema_of_the_standard() {
     }
     let waived = results.iter().find(|result| result["ruleId"] == "radiation-neglected").unwrap();
     assert_eq!(waived["suppressions"][0]["justification"], "Faces are polished; see the test report.");
-    let region = &results.iter().find(|result| result["ruleId"] == "dimension-mismatch").unwrap()["locations"][0]
-        ["physicalLocation"];
+    let region = &results.iter().find(|result| result["ruleId"] == "dimension-mismatch").unwrap()["locations"][0]["physicalLocation"];
     assert_eq!(region["artifactLocation"]["uri"], "shared/materials.buoy");
-    assert_eq!(region["region"], serde_json::json!({ "startLine": 2, "startColumn": 19, "endLine": 2, "endColumn": 25 }));
+    assert_eq!(
+        region["region"],
+        serde_json::json!({ "startLine": 2, "startColumn": 19, "endLine": 2, "endColumn": 25 })
+    );
     assert_eq!(run["invocations"][0]["executionSuccessful"], false);
 }
 
@@ -269,6 +284,6 @@ fn the_order_in_which_decks_and_findings_come_decides_nothing() {
     let one = [deck("a.buoy", findings()), deck("b.buoy", findings())];
     let other = [deck("b.buoy", turned.clone()), deck("a.buoy", turned)];
     for face in [Face::Cards, Face::Lines, Face::Json, Face::Sarif] {
-        assert_eq!(shown(&one, face, &Options::default()), shown(&other, face, &Options::default()), "{face:?}");
+        assert_eq!(shown(&one, face, Layout::default()), shown(&other, face, Layout::default()), "{face:?}");
     }
 }

@@ -12,11 +12,10 @@
 //!     Put right by: density-law ideal-gas, or T_hot below 55 degC.
 //! ```
 
-use super::count::Count;
 use super::paint::{Paint, harmless};
-use super::sheet::{Remark, Sheet, Spot};
+use super::sheet::{Remark, Report, Sheet, Spot};
 use super::wrap;
-use super::{Options, scale};
+use super::{Layout, scale};
 use crate::syntax::Level;
 use std::io::{self, Write};
 use unicode_width::UnicodeWidthStr;
@@ -30,15 +29,15 @@ const REMARK: usize = 4;
 ///
 /// # Errors
 /// Those of `out`.
-pub fn write(sheets: &[Sheet], out: &mut dyn Write, options: &Options) -> io::Result<()> {
-    for sheet in sheets.iter().filter(|sheet| !sheet.remarks.is_empty()) {
-        deck(sheet, out, options)?;
+pub fn write(report: &Report, out: &mut dyn Write, layout: Layout) -> io::Result<()> {
+    for sheet in report.sheets.iter().filter(|sheet| !sheet.remarks.is_empty()) {
+        deck(sheet, out, layout)?;
     }
-    closing(&Count::of(sheets), out, options)
+    closing(report, out, layout)
 }
 
-fn deck(sheet: &Sheet, out: &mut dyn Write, options: &Options) -> io::Result<()> {
-    writeln!(out, "{}", options.paint.strong(&harmless(&sheet.path)))?;
+fn deck(sheet: &Sheet, out: &mut dyn Write, layout: Layout) -> io::Result<()> {
+    writeln!(out, "{}", layout.paint.strong(&harmless(&sheet.path)))?;
     let (waived, counted): (Vec<&Remark>, Vec<&Remark>) =
         sheet.remarks.iter().partition(|remark| remark.finding.waived.is_some());
     let mut above: Option<&Remark> = None;
@@ -47,78 +46,82 @@ fn deck(sheet: &Sheet, out: &mut dyn Write, options: &Options) -> io::Result<()>
             (&above.entry, above.entry_line, &above.spot.file) == (&remark.entry, remark.entry_line, &remark.spot.file)
         });
         if !same_entry {
-            heading(remark, sheet, out, options)?;
+            heading(remark, sheet, out, layout)?;
         }
         let same_line = same_entry && above.is_some_and(|above| above.spot.start.line == remark.spot.start.line);
-        card(remark, !same_line, out, options)?;
+        card(remark, !same_line, out, layout)?;
         above = Some(remark);
     }
     if !waived.is_empty() {
         writeln!(out)?;
-        waivers(&waived, out, options)?;
+        waivers(&waived, out, layout)?;
     }
     writeln!(out)
 }
 
 /// The entry, and its file where that is not the deck.
-fn heading(remark: &Remark, sheet: &Sheet, out: &mut dyn Write, options: &Options) -> io::Result<()> {
+fn heading(remark: &Remark, sheet: &Sheet, out: &mut dyn Write, layout: Layout) -> io::Result<()> {
     let indent = " ".repeat(ENTRY);
     let elsewhere = if remark.spot.file == sheet.path { None } else { Some(harmless(&remark.spot.file)) };
     let entry = match (remark.entry.as_str(), &elsewhere) {
         ("", _) => "above the first entry".to_string(),
-        (entry, _) => cut(&harmless(entry), options.width.saturating_sub(ENTRY)),
+        (entry, _) => cut(&harmless(entry), layout.width.saturating_sub(ENTRY)),
     };
-    write!(out, "\n{indent}{}", options.paint.strong(&entry))?;
+    write!(out, "\n{indent}{}", layout.paint.strong(&entry))?;
     match elsewhere {
         None => writeln!(out),
-        Some(file) => writeln!(out, "{}", options.paint.faint(&format!(", in {file}"))),
+        Some(file) => writeln!(out, "{}", layout.paint.faint(&format!(", in {file}"))),
     }
 }
 
-fn card(remark: &Remark, with_line: bool, out: &mut dyn Write, options: &Options) -> io::Result<()> {
+fn card(remark: &Remark, with_line: bool, out: &mut dyn Write, layout: Layout) -> io::Result<()> {
     let (finding, indent) = (&remark.finding, " ".repeat(REMARK));
-    let paint = options.paint;
+    let paint = layout.paint;
     writeln!(out)?;
     if with_line {
         let line = format!("line {}", remark.spot.start.line);
         let said = harmless(&remark.statement);
         let quoted = if said.is_empty() { line } else { format!("{line}: {said}") };
-        writeln!(out, "{indent}{}", paint.faint(&cut(&quoted, options.width.saturating_sub(REMARK))))?;
+        writeln!(out, "{indent}{}", paint.faint(&cut(&quoted, layout.width.saturating_sub(REMARK))))?;
     }
     let level = paint.level(finding.level, finding.level.word()).to_string();
     writeln!(out, "{indent}{}, {level}", paint.strong(finding.check))?;
-    wrap::paragraph(out, &harmless(&remark.whole_message()), REMARK, 0, options.width)?;
-    if let Some(drawn) = finding.margin.as_ref().and_then(|margin| scale::line(margin, options.width.min(wrap::WIDEST) - REMARK - 2)) {
+    wrap::paragraph(out, &harmless(&remark.whole_message()), REMARK, 0, layout.width)?;
+    if let Some(drawn) =
+        finding.margin.as_ref().and_then(|margin| scale::line(margin, layout.width.min(wrap::WIDEST) - REMARK - 2))
+    {
         writeln!(out, "{indent}  {}", coloured(&harmless(&drawn), finding.level, paint))?;
     }
     if let Some(remedy) = remedy(remark) {
-        wrap::paragraph(out, &format!("Put right by: {}", harmless(&remedy)), REMARK, 2, options.width)?;
+        wrap::paragraph(out, &harmless(&remedy), REMARK, 2, layout.width)?;
     }
     for (related, spot) in finding.related.iter().zip(&remark.related) {
         let place = place_beside(spot, &remark.spot);
-        wrap::paragraph(out, &format!("See {place}: {}", harmless(&related.message)), REMARK, 2, options.width)?;
+        wrap::paragraph(out, &format!("See {place}: {}", harmless(&related.message)), REMARK, 2, layout.width)?;
     }
     if !remark.also_in.is_empty() {
-        wrap::paragraph(out, &format!("Also in {}.", shortened(&remark.also_in)), REMARK, 2, options.width)?;
+        wrap::paragraph(out, &format!("Also in {}.", shortened(&remark.also_in)), REMARK, 2, layout.width)?;
     }
     Ok(())
 }
 
-/// The advice in words; where there is none, what the first sure fix does.
+/// The advice in words; where there is none, what the surest fix does.
 fn remedy(remark: &Remark) -> Option<String> {
     let finding = &remark.finding;
     if !finding.remedy.is_empty() {
-        return Some(finding.remedy.clone());
+        return Some(sentence(&format!("Put right by: {}", finding.remedy)));
     }
     let fix = finding.fixes.iter().find(|fix| fix.sure).or(finding.fixes.first())?;
-    let mut title = fix.title.clone();
-    if !title.ends_with('.') {
-        title.push('.');
-    }
-    Some(title)
+    let mut letters = fix.title.chars();
+    let first: String = letters.next().map(|first| first.to_lowercase().collect()).unwrap_or_default();
+    Some(sentence(&format!("To put it right, {first}{}", letters.as_str())))
 }
 
-fn waivers(waived: &[&Remark], out: &mut dyn Write, options: &Options) -> io::Result<()> {
+fn sentence(text: &str) -> String {
+    if text.ends_with(['.', '!', '?']) { text.to_string() } else { format!("{text}.") }
+}
+
+fn waivers(waived: &[&Remark], out: &mut dyn Write, layout: Layout) -> io::Result<()> {
     let mut said: Vec<(String, usize)> = Vec::new();
     for remark in waived {
         let finding = &remark.finding;
@@ -133,8 +136,8 @@ fn waivers(waived: &[&Remark], out: &mut dyn Write, options: &Options) -> io::Re
     for (line, times) in said {
         let times = if times > 1 { format!(" ({times} times)") } else { String::new() };
         let text = format!("Waived{times}: {}", harmless(&line));
-        for line in wrap::lines(&text, ENTRY, 2, options.width) {
-            writeln!(out, "{}", options.paint.faint(&line))?;
+        for line in wrap::lines(&text, ENTRY, 2, layout.width) {
+            writeln!(out, "{}", layout.paint.faint(&line))?;
         }
     }
     Ok(())
@@ -144,8 +147,8 @@ fn waivers(waived: &[&Remark], out: &mut dyn Write, options: &Options) -> io::Re
 ///
 /// # Errors
 /// Those of `out`.
-pub fn closing(count: &Count, out: &mut dyn Write, options: &Options) -> io::Result<()> {
-    let paint = options.paint;
+pub fn closing(report: &Report, out: &mut dyn Write, layout: Layout) -> io::Result<()> {
+    let (paint, count) = (layout.paint, &report.count);
     write!(out, "{}: ", count.decks_in_words())?;
     let levels = count.by_level();
     if levels.is_empty() {
@@ -161,12 +164,18 @@ pub fn closing(count: &Count, out: &mut dyn Write, options: &Options) -> io::Res
     if levels.is_empty() {
         return Ok(());
     }
-    let reached = match count.at_or_above(options.gate) {
+    let reached = match count.at_or_above_gate {
         0 => "nothing reaches it".to_string(),
         1 => "1 finding reaches it".to_string(),
         more => format!("{more} findings reach it"),
     };
-    writeln!(out, "The gate is at {}: {reached}.", options.gate.word())
+    let mut gates: Vec<Level> = report.sheets.iter().map(|sheet| sheet.gate.unwrap_or(Level::Warning)).collect();
+    gates.sort_unstable();
+    gates.dedup();
+    match gates.as_slice() {
+        [one] => writeln!(out, "The gate is at {}: {reached}.", one.word()),
+        _ => writeln!(out, "The gate is that of each deck's practice: {reached}."),
+    }
 }
 
 /// A place as said beside another: the file only where it differs.

@@ -20,13 +20,17 @@ pub struct Count {
     pub hints: usize,
     /// Findings that a waiver covers, of any level.
     pub waived: usize,
+    /// Findings at the gate of their deck or above it.
+    pub at_or_above_gate: usize,
 }
 
 impl Count {
     /// The count of sheets.
     pub fn of(sheets: &[Sheet]) -> Count {
         let mut count = Count { decks: sheets.len(), ..Count::default() };
-        for finding in sheets.iter().flat_map(|sheet| &sheet.remarks).map(|remark| &remark.finding) {
+        for remark in sheets.iter().flat_map(|sheet| &sheet.remarks) {
+            let finding = &remark.finding;
+            count.at_or_above_gate += usize::from(remark.reaches_gate);
             *match (&finding.waived, finding.level) {
                 (Some(_), _) => &mut count.waived,
                 (None, Level::Error) => &mut count.errors,
@@ -36,16 +40,6 @@ impl Count {
             } += 1;
         }
         count
-    }
-
-    /// How many are at a level or above it.
-    pub fn at_or_above(&self, gate: Level) -> usize {
-        [(Level::Hint, self.hints), (Level::Information, self.information)]
-            .into_iter()
-            .chain([(Level::Warning, self.warnings), (Level::Error, self.errors)])
-            .filter(|(level, _)| *level >= gate)
-            .map(|(_, number)| number)
-            .sum()
     }
 
     /// The levels that have findings, in words, the highest first: `1 error`, `2 warnings`, `3 for information`.

@@ -3,8 +3,7 @@
 
 use super::count::Count;
 use super::position::Position;
-use super::sheet::{Remark, Sheet, Spot};
-use super::Options;
+use super::sheet::{Remark, Report, Sheet, Spot, Unreadable};
 use crate::syntax::Level;
 use schemars::{JsonSchema, Schema, schema_for};
 use serde::Serialize;
@@ -16,7 +15,7 @@ pub const FORMAT: u32 = 1;
 /// What was found in decks.
 #[derive(Debug, Serialize, JsonSchema)]
 #[schemars(title = "Findings of deckline")]
-pub struct Report {
+pub struct Findings {
     /// The version of this form.
     pub format: u32,
     /// What wrote it.
@@ -29,10 +28,6 @@ pub struct Report {
     pub unreadable: Vec<Unreadable>,
     /// Numbers of findings.
     pub count: Count,
-    /// The level from which findings make the assessment fail.
-    pub gate: LevelWord,
-    /// How many findings are at the gate or above it.
-    pub at_or_above_gate: usize,
 }
 
 /// A program and its version.
@@ -51,6 +46,8 @@ pub struct DeckNamed {
     pub path: String,
     /// The title of its case; empty if none.
     pub title: String,
+    /// The level from which its findings make the assessment fail.
+    pub gate: LevelWord,
 }
 
 /// One finding.
@@ -83,6 +80,8 @@ pub struct Found {
     pub fixes: Vec<FixOffered>,
     /// The reason of the waiver that covers it; none where it counts.
     pub waived: Option<String>,
+    /// Whether it makes the assessment fail.
+    pub reaches_gate: bool,
     /// The decks that have it.
     pub decks: Vec<String>,
 }
@@ -169,49 +168,38 @@ pub struct EditOffered {
     pub text: String,
 }
 
-/// A file that could not be read.
-#[derive(Debug, Serialize, JsonSchema)]
-pub struct Unreadable {
-    /// Its path.
-    pub path: String,
-    /// Why.
-    pub message: String,
-}
-
 /// Writes the report.
 ///
 /// # Errors
 /// Those of `out`.
-pub fn write(sheets: &[Sheet], out: &mut dyn Write, options: &Options) -> io::Result<()> {
-    serde_json::to_writer_pretty(&mut *out, &report(sheets, options)).map_err(io::Error::from)?;
+pub fn write(report: &Report, out: &mut dyn Write) -> io::Result<()> {
+    serde_json::to_writer_pretty(&mut *out, &found_in(report)).map_err(io::Error::from)?;
     writeln!(out)
 }
 
 /// The schema of the report.
 pub fn schema() -> Schema {
-    schema_for!(Report)
+    schema_for!(Findings)
 }
 
-/// The report of sheets in their order.
-pub fn report(sheets: &[Sheet], options: &Options) -> Report {
-    let count = Count::of(sheets);
+/// A report in this form.
+pub fn found_in(report: &Report) -> Findings {
     let found = |sheet: &Sheet| sheet.remarks.iter().map(|remark| found(remark, sheet)).collect::<Vec<_>>();
-    Report {
+    Findings {
         format: FORMAT,
         tool: Tool { name: env!("CARGO_PKG_NAME").to_string(), version: env!("CARGO_PKG_VERSION").to_string() },
-        decks: sheets
+        decks: report
+            .sheets
             .iter()
-            .map(|sheet| DeckNamed { path: sheet.path.clone(), title: sheet.title.clone() })
+            .map(|sheet| DeckNamed {
+                path: sheet.path.clone(),
+                title: sheet.title.clone(),
+                gate: sheet.gate.unwrap_or(Level::Warning).into(),
+            })
             .collect(),
-        findings: sheets.iter().flat_map(found).collect(),
-        unreadable: options
-            .unreadable
-            .iter()
-            .map(|(path, message)| Unreadable { path: path.clone(), message: message.clone() })
-            .collect(),
-        at_or_above_gate: count.at_or_above(options.gate),
-        count,
-        gate: options.gate.into(),
+        findings: report.sheets.iter().flat_map(found).collect(),
+        unreadable: report.unreadable.clone(),
+        count: report.count,
     }
 }
 
@@ -256,6 +244,7 @@ fn found(remark: &Remark, sheet: &Sheet) -> Found {
             })
             .collect(),
         waived: finding.waived.clone(),
+        reaches_gate: remark.reaches_gate,
         decks: std::iter::once(&sheet.path).chain(&remark.also_in).cloned().collect(),
     }
 }

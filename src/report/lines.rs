@@ -2,15 +2,16 @@
 //! `file:line:column: level: text [check]`. What a waiver covers is left out.
 
 use super::paint::harmless;
-use super::sheet::{Remark, Sheet};
+use super::sheet::{Remark, Report};
 use std::io::{self, Write};
 
 /// Writes the lines.
 ///
 /// # Errors
 /// Those of `out`.
-pub fn write(sheets: &[Sheet], out: &mut dyn Write) -> io::Result<()> {
-    for remark in sheets.iter().flat_map(|sheet| &sheet.remarks).filter(|remark| remark.finding.waived.is_none()) {
+pub fn write(report: &Report, out: &mut dyn Write) -> io::Result<()> {
+    for remark in report.sheets.iter().flat_map(|sheet| &sheet.remarks).filter(|remark| remark.finding.waived.is_none())
+    {
         writeln!(out, "{}", line(remark))?;
     }
     Ok(())

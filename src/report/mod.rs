@@ -15,11 +15,10 @@ pub mod scale;
 pub mod sheet;
 pub mod wrap;
 
-use crate::syntax::Level;
 pub use count::Count;
 pub use paint::Paint;
 pub use position::Position;
-pub use sheet::{Remark, Sheet};
+pub use sheet::{Remark, Report, Sheet, Unreadable};
 use std::io::{self, Write};
 
 /// The forms in which findings are shown.
@@ -35,36 +34,30 @@ pub enum Face {
     Sarif,
 }
 
-/// What a report says beside the findings, and how it is laid out.
-#[derive(Clone, Debug)]
-pub struct Options {
-    /// Columns of text at most; cards only.
+/// How text for people is laid out.
+#[derive(Clone, Copy, Debug)]
+pub struct Layout {
+    /// Columns of text at most.
     pub width: usize,
-    /// Whether terminal colours are written; cards only.
+    /// Whether terminal colours are written.
     pub paint: Paint,
-    /// The level from which findings make an assessment fail.
-    pub gate: Level,
-    /// Files that could not be read: path and why.
-    pub unreadable: Vec<(String, String)>,
 }
 
-impl Default for Options {
+impl Default for Layout {
     fn default() -> Self {
-        Options { width: 80, paint: Paint::Plain, gate: Level::Warning, unreadable: Vec::new() }
+        Layout { width: 80, paint: Paint::Plain }
     }
 }
 
-/// Writes what was found in decks. The sheets are shown in the order of their paths, and the same remark in a file
-/// that several decks include is shown once.
+/// Writes what was found.
 ///
 /// # Errors
 /// Those of `out`.
-pub fn write(sheets: &[Sheet], face: Face, out: &mut dyn Write, options: &Options) -> io::Result<()> {
-    let sheets = &sheet::in_order(sheets);
+pub fn write(report: &Report, face: Face, out: &mut dyn Write, layout: Layout) -> io::Result<()> {
     match face {
-        Face::Cards => cards::write(sheets, out, options),
-        Face::Lines => lines::write(sheets, out),
-        Face::Json => json::write(sheets, out, options),
-        Face::Sarif => sarif::write(sheets, out, options),
+        Face::Cards => cards::write(report, out, layout),
+        Face::Lines => lines::write(report, out),
+        Face::Json => json::write(report, out),
+        Face::Sarif => sarif::write(report, out),
     }
 }

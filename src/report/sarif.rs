@@ -1,8 +1,8 @@
 //! Findings as SARIF 2.1.0 (OASIS Standard, Static Analysis Results Interchange Format), for tools that gather the
 //! findings of many programs. Each check is a rule, and its basis the rule's help.
 
-use super::sheet::{Remark, Sheet, Spot};
-use super::{Options, basis};
+use super::basis;
+use super::sheet::{Remark, Report, Sheet, Spot, Unreadable};
 use crate::checks::CHECKS;
 use crate::syntax::Level;
 use percent_encoding::{AsciiSet, NON_ALPHANUMERIC, utf8_percent_encode};
@@ -22,13 +22,14 @@ pub const SCHEMA: &str = "https://docs.oasis-open.org/sarif/sarif/v2.1.0/errata0
 ///
 /// # Errors
 /// Those of `out`.
-pub fn write(sheets: &[Sheet], out: &mut dyn Write, options: &Options) -> io::Result<()> {
-    serde_json::to_writer_pretty(&mut *out, &log(sheets, options)).map_err(io::Error::from)?;
+pub fn write(report: &Report, out: &mut dyn Write) -> io::Result<()> {
+    serde_json::to_writer_pretty(&mut *out, &log(report)).map_err(io::Error::from)?;
     writeln!(out)
 }
 
-/// The log of sheets in their order.
-pub fn log(sheets: &[Sheet], options: &Options) -> Sarif {
+/// The log of a report.
+pub fn log(report: &Report) -> Sarif {
+    let sheets = &report.sheets;
     let rules = rules(sheets);
     let index = |check: &str| rules.iter().position(|rule| rule.id == check).and_then(|at| i64::try_from(at).ok());
     let remarks = || sheets.iter().flat_map(|sheet| &sheet.remarks);
@@ -43,7 +44,7 @@ pub fn log(sheets: &[Sheet], options: &Options) -> Sarif {
     let run = Run::builder()
         .tool(Tool::builder().driver(driver).build())
         .column_kind(Value::from("unicodeCodePoints"))
-        .invocations(vec![invocation(options)])
+        .invocations(vec![invocation(report)])
         .results(results)
         .build();
     Sarif::builder().version(json!("2.1.0")).schema(SCHEMA.to_string()).runs(vec![run]).build()
@@ -96,9 +97,10 @@ fn result(remark: &Remark, rule_index: Option<i64>) -> SarifResult {
     result.rule_index = rule_index;
     result.related_locations = related(remark);
     result.fixes = fixes(remark);
-    result.suppressions = finding.waived.as_ref().map(|reason| {
-        vec![Suppression::builder().kind(json!("inSource")).justification(reason.clone()).build()]
-    });
+    result.suppressions = finding
+        .waived
+        .as_ref()
+        .map(|reason| vec![Suppression::builder().kind(json!("inSource")).justification(reason.clone()).build()]);
     result.properties = properties(remark);
     result
 }
@@ -171,12 +173,12 @@ fn bag(tags: &[&str], additional_properties: BTreeMap<String, Value>) -> Propert
     PropertyBag { tags, additional_properties }
 }
 
-fn invocation(options: &Options) -> Invocation {
-    let mut invocation = Invocation::builder().execution_successful(options.unreadable.is_empty()).build();
-    let notices: Vec<Notification> = options
+fn invocation(report: &Report) -> Invocation {
+    let mut invocation = Invocation::builder().execution_successful(report.unreadable.is_empty()).build();
+    let notices: Vec<Notification> = report
         .unreadable
         .iter()
-        .map(|(path, message)| {
+        .map(|Unreadable { path, message }| {
             let place = PhysicalLocation::builder().artifact_location(artifact(path)).build();
             Notification::builder()
                 .level(json!("error"))
