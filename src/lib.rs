@@ -5,6 +5,7 @@
 
 pub mod case;
 pub mod checks;
+pub mod command;
 pub mod physics;
 pub mod quantity;
 pub mod report;

@@ -13,6 +13,7 @@ pub mod position;
 pub mod sarif;
 pub mod scale;
 pub mod sheet;
+pub mod substance;
 pub mod wrap;
 
 pub use count::Count;
