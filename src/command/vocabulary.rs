@@ -102,7 +102,7 @@ fn entry(row: &EntryRow, out: &mut dyn Write, layout: Layout) -> io::Result<()> 
     example(row.example, out, layout)
 }
 
-fn statement(row: &StatementRow, out: &mut dyn Write, layout: Layout) -> io::Result<()> {
+fn statement(row: &'static StatementRow, out: &mut dyn Write, layout: Layout) -> io::Result<()> {
     let entries: Vec<&str> = row.entries.iter().map(|kind| kind.word()).collect();
     block(&format!("{}, in `{}`", shape(row.word, row.slots), entries.join("`, `")), row.description, out, layout)?;
     slots(row.slots, out, layout)?;

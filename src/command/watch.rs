@@ -6,10 +6,12 @@ use notify::{Event, EventKind, RecommendedWatcher, RecursiveMode, Watcher};
 use std::collections::BTreeSet;
 use std::path::{Path, PathBuf};
 use std::sync::mpsc::{Receiver, RecvTimeoutError, channel};
-use std::time::Duration;
+use std::time::{Duration, Instant};
 
 /// Editors write a file in several steps; a pause this long ends them.
 const PAUSE: Duration = Duration::from_millis(150);
+/// A check comes this long after the first change at the latest.
+const LONGEST_PAUSE: Duration = Duration::from_secs(2);
 
 /// Checks, waits for a change, and checks again, until interrupted or until nobody reads the result.
 pub fn run(arguments: &Arguments) -> u8 {
@@ -70,10 +72,14 @@ fn wait(changes: &Receiver<notify::Result<Event>>) -> bool {
             Ok(_) => {}
         }
     }
+    // Other files may change all the time, and decks too: neither may put the check off for ever.
+    let latest = Instant::now() + LONGEST_PAUSE;
+    let mut rest = Instant::now() + PAUSE;
     loop {
-        match changes.recv_timeout(PAUSE) {
+        match changes.recv_timeout(rest.min(latest).saturating_duration_since(Instant::now())) {
             Err(RecvTimeoutError::Timeout) => return true,
             Err(RecvTimeoutError::Disconnected) => return false,
+            Ok(event) if concerns_decks(&event) => rest = Instant::now() + PAUSE,
             Ok(_) => {}
         }
     }

@@ -4,7 +4,7 @@
 use super::count::Count;
 use super::position::Position;
 use super::sheet::{Remark, Report, Sheet, Spot, Unreadable};
-use crate::syntax::Level;
+use crate::syntax::{Level, Margin};
 use schemars::{JsonSchema, Schema, schema_for};
 use serde::Serialize;
 use std::io::{self, Write};
@@ -187,7 +187,7 @@ pub fn found_in(report: &Report) -> Findings {
     let found = |sheet: &Sheet| sheet.remarks.iter().map(|remark| found(remark, sheet)).collect::<Vec<_>>();
     Findings {
         format: FORMAT,
-        tool: Tool { name: env!("CARGO_PKG_NAME").to_string(), version: env!("CARGO_PKG_VERSION").to_string() },
+        tool: Tool::this(),
         decks: report
             .sheets
             .iter()
@@ -216,13 +216,7 @@ fn found(remark: &Remark, sheet: &Sheet) -> Found {
         subject: finding.subject.clone(),
         message: finding.message.clone(),
         remedy: finding.remedy.clone(),
-        margin: finding.margin.as_ref().map(|margin| Weighed {
-            quantity: margin.quantity.clone(),
-            value: finite(margin.value),
-            limit: finite(margin.limit),
-            band: margin.band.and_then(|(from, to)| finite(from).zip(finite(to))),
-            unit: margin.unit.clone(),
-        }),
+        margin: finding.margin.as_ref().map(Weighed::from),
         points: finding.points.as_ref().map(|points| Points {
             count: points.count,
             total: points.total,
@@ -252,6 +246,45 @@ fn found(remark: &Remark, sheet: &Sheet) -> Found {
 /// JSON has no infinity.
 fn finite(value: f64) -> Option<f64> {
     value.is_finite().then_some(value)
+}
+
+impl Tool {
+    /// This program.
+    pub fn this() -> Tool {
+        Tool { name: env!("CARGO_PKG_NAME").to_string(), version: env!("CARGO_PKG_VERSION").to_string() }
+    }
+}
+
+impl Weighed {
+    /// The margin again; none where value or limit is no finite number.
+    pub fn margin(&self) -> Option<Margin> {
+        let (value, limit) = self.value.zip(self.limit)?;
+        Some(Margin { quantity: self.quantity.clone(), value, limit, band: self.band, unit: self.unit.clone() })
+    }
+}
+
+impl From<&Margin> for Weighed {
+    fn from(margin: &Margin) -> Weighed {
+        Weighed {
+            quantity: margin.quantity.clone(),
+            value: finite(margin.value),
+            limit: finite(margin.limit),
+            band: margin.band.and_then(|(from, to)| finite(from).zip(finite(to))),
+            unit: margin.unit.clone(),
+        }
+    }
+}
+
+impl LevelWord {
+    /// The level.
+    pub const fn level(&self) -> Level {
+        match self {
+            LevelWord::Hint => Level::Hint,
+            LevelWord::Information => Level::Information,
+            LevelWord::Warning => Level::Warning,
+            LevelWord::Error => Level::Error,
+        }
+    }
 }
 
 impl From<&Spot> for PlaceIn {

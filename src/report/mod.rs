@@ -8,6 +8,7 @@ pub mod cards;
 pub mod count;
 pub mod json;
 pub mod lines;
+pub mod numbers;
 pub mod paint;
 pub mod position;
 pub mod sarif;

@@ -2,12 +2,12 @@
 
 use super::paint::harmless;
 use super::{Layout, wrap};
+use crate::quantity::Dimension;
 use crate::quantity::dimension_names::{
     COMPRESSIBILITY, DENSITY, DYNAMIC_VISCOSITY, KINEMATIC_VISCOSITY, PRESSURE, SPECIFIC_HEAT_CAPACITY, TEMPERATURE,
     THERMAL_CONDUCTIVITY, THERMAL_EXPANSION,
 };
 use crate::quantity::display::{format_number, format_si};
-use crate::quantity::Dimension;
 use crate::substances::{Medium, Properties};
 use std::io::{self, Write};
 
@@ -62,25 +62,40 @@ pub fn state(
     let at = composition(medium);
     let (temperature, pressure) = (format_si(temperature, TEMPERATURE), format_si(pressure, PRESSURE));
     writeln!(out, "{} at {temperature}, {pressure}{at}\n", layout.paint.strong(&medium.substance.name.text))?;
-    for (symbol, name, value) in rows(properties) {
-        writeln!(out, "  {symbol:<3} {name:<34} {value}")?;
+    for PropertyRow { symbol, name, value, dimension, .. } in rows(properties) {
+        let value = if value.is_finite() { format_si(value, dimension) } else { "not known here".to_string() };
+        writeln!(out, "  {symbol:<3} {name:<30} {value}")?;
     }
     Ok(())
 }
 
-/// Symbol, name and value of every property.
-pub fn rows(properties: &Properties) -> Vec<(&'static str, &'static str, String)> {
-    let row = |symbol, name, value: f64, dimension: Dimension| (symbol, name, format_si(value, dimension));
+/// One property.
+pub struct PropertyRow {
+    /// Its symbol.
+    pub symbol: &'static str,
+    /// Its name.
+    pub name: &'static str,
+    /// Its value, SI.
+    pub value: f64,
+    /// Its dimension.
+    pub dimension: Dimension,
+    /// From which others it follows; empty for those of the data.
+    pub formula: &'static str,
+}
+
+/// Every property.
+pub fn rows(properties: &Properties) -> Vec<PropertyRow> {
+    let row = |symbol, name, value, dimension, formula| PropertyRow { symbol, name, value, dimension, formula };
     vec![
-        row("ρ", "density", properties.density, DENSITY),
-        row("cp", "specific heat capacity", properties.heat_capacity, SPECIFIC_HEAT_CAPACITY),
-        row("μ", "dynamic viscosity", properties.viscosity, DYNAMIC_VISCOSITY),
-        row("k", "thermal conductivity", properties.conductivity, THERMAL_CONDUCTIVITY),
-        row("α", "thermal expansion", properties.expansion, THERMAL_EXPANSION),
-        row("κ", "isothermal compressibility", properties.compressibility, COMPRESSIBILITY),
-        row("ν", "kinematic viscosity", properties.kinematic_viscosity(), KINEMATIC_VISCOSITY),
-        row("a", "thermal diffusivity", properties.diffusivity(), KINEMATIC_VISCOSITY),
-        row("Pr", "Prandtl number", properties.prandtl(), Dimension::NONE),
+        row("ρ", "density", properties.density, DENSITY, ""),
+        row("cp", "specific heat capacity", properties.heat_capacity, SPECIFIC_HEAT_CAPACITY, ""),
+        row("μ", "dynamic viscosity", properties.viscosity, DYNAMIC_VISCOSITY, ""),
+        row("k", "thermal conductivity", properties.conductivity, THERMAL_CONDUCTIVITY, ""),
+        row("α", "thermal expansion", properties.expansion, THERMAL_EXPANSION, ""),
+        row("κ", "isothermal compressibility", properties.compressibility, COMPRESSIBILITY, ""),
+        row("ν", "kinematic viscosity", properties.kinematic_viscosity(), KINEMATIC_VISCOSITY, "μ / ρ"),
+        row("a", "thermal diffusivity", properties.diffusivity(), KINEMATIC_VISCOSITY, "k / (ρ cp)"),
+        row("Pr", "Prandtl number", properties.prandtl(), Dimension::NONE, "ν / a"),
     ]
 }
 

@@ -146,8 +146,7 @@ pub fn with_tables(reference: &str) -> Result<String, String> {
     while let Some((before, after)) = rest.split_once(&opening) {
         let (name, after) = after.split_once(" -->\n").ok_or("a marker comment does not end")?;
         let (_, after) = after.split_once("<!-- end -->").ok_or(format!("the table `{name}` has no end"))?;
-        let (_, table) =
-            tables.iter().find(|(known, _)| known == name).ok_or(format!("there is no table `{name}`"))?;
+        let (_, table) = tables.iter().find(|(known, _)| known == name).ok_or(format!("there is no table `{name}`"))?;
         missing.retain(|known| *known != name);
         out.push_str(&format!("{before}{opening}{name} -->\n{table}<!-- end -->"));
         rest = after;
@@ -197,7 +196,10 @@ fn statements(kind: EntryKind) -> String {
 }
 
 fn choice_table(offered: &[Choice]) -> String {
-    table(&["word", "what it means"], offered.iter().map(|choice| vec![code(choice.word), choice.description.to_string()]))
+    table(
+        &["word", "what it means"],
+        offered.iter().map(|choice| vec![code(choice.word), choice.description.to_string()]),
+    )
 }
 
 fn functions() -> String {
@@ -247,11 +249,25 @@ fn units() -> String {
         [kind, row.note].into_iter().filter(|note| !note.is_empty()).collect::<Vec<_>>().join("; ")
     };
     table(
-        &["unit", "name", "prefixes", "note", "source of the factor"],
+        &["unit", "name", "in SI", "prefixes", "note", "source of the factor"],
         UNITS.iter().map(|row| {
-            vec![spellings(row), row.name.to_string(), prefixed(row).to_string(), notes(row), row.source.to_string()]
+            let cells = [spellings(row), row.name.to_string(), in_si(row), prefixed(row).to_string(), notes(row)];
+            cells.into_iter().chain([row.source.to_string()]).collect()
         }),
     )
+}
+
+/// What one of a unit is in SI.
+fn in_si(row: &UnitRow) -> String {
+    let base = row.dimension.base_units();
+    let offset = if row.offset == 0.0 { String::new() } else { format!(", from {} {base}", exact(row.offset)) };
+    format!("{}{}{offset}", exact(row.factor), if base == "1" { String::new() } else { format!(" {base}") })
+}
+
+/// All digits that a factor has, up to 12.
+fn exact(value: f64) -> String {
+    let rounded: f64 = format!("{value:.11e}").parse().unwrap_or(value);
+    if (1e-3..1e7).contains(&rounded.abs()) { rounded.to_string() } else { format!("{rounded:e}") }
 }
 
 fn prefixes() -> String {
@@ -294,10 +310,12 @@ mod tests {
 
     #[test]
     fn tables_are_put_between_their_markers() {
-        let all: String =
-            tables().iter().map(|(name, _)| format!("# {name}\n<!-- table: {name} -->\nold\n<!-- end -->\n")).collect();
+        let all: String = tables()
+            .iter()
+            .map(|(name, _)| format!("# {name}\n<!-- table: {name} -->\nSTALE\n<!-- end -->\n"))
+            .collect();
         let made = with_tables(&all).unwrap();
-        assert!(!made.contains("old") && made.contains("| `case [\"TITLE\"]` |"));
+        assert!(!made.contains("STALE") && made.contains("| `case [\"TITLE\"]` |"));
         assert_eq!(with_tables(&made).unwrap(), made);
         assert_eq!(with_tables("").unwrap_err(), "the table `entries` stands nowhere");
         assert_eq!(with_tables("<!-- table: x -->\n<!-- end -->").unwrap_err(), "there is no table `x`");
@@ -320,7 +338,9 @@ mod tests {
             if std::env::var_os("UPDATE").is_some() {
                 std::fs::write(path, made).unwrap();
             } else {
-                panic!("grammar/README.md is behind the vocabulary. This updates it: UPDATE=1 cargo test --lib the_reference");
+                panic!(
+                    "grammar/README.md is behind the vocabulary. This updates it: UPDATE=1 cargo test --lib the_reference"
+                );
             }
         }
     }
