@@ -2,7 +2,6 @@
 
 use deckline::case::sweep::SWEEP_POINTS;
 use deckline::quantity::unit_parser::LONGEST_UNIT;
-use deckline::syntax::tree::Content;
 use deckline::syntax::{Level, limits, parse};
 use deckline::vocabulary::{ENTRIES, STATEMENTS};
 use deckline::workspace::analyse_text;
@@ -35,14 +34,16 @@ fn parts_of_decks_in_it_can_be_read() {
             for line in &entry.entry.lines {
                 assert!(line.problem.is_none(), "{part}\n{:?}", line.problem);
             }
-            assert!(entry.entry.lines.iter().any(|line| line.content != Content::Blank), "{part}");
+            if entry.entry.head.is_some() {
+                assert!(entry.entry.head_phrase().is_some(), "{part}");
+            }
         }
     }
-    // A substance by a table is one more thing that the reference shows whole.
+    // A substance stands for itself.
     let substance = blocks().into_iter().find(|(_, part)| part.contains("substance test_oil")).unwrap().1;
-    let errors: Vec<_> =
-        analyse_text(substance, "2026-01-01").findings.into_iter().filter(|one| one.place.span.start > 0 && one.level == Level::Error).collect();
-    assert!(errors.is_empty(), "{errors:#?}");
+    let findings = analyse_text(substance, "2026-01-01").findings;
+    let serious: Vec<_> = findings.into_iter().filter(|one| one.level >= Level::Warning).collect();
+    assert!(serious.is_empty(), "{serious:#?}");
 }
 
 #[test]

@@ -60,11 +60,15 @@ pub fn state(
     layout: Layout,
 ) -> io::Result<()> {
     let at = composition(medium);
+    let phase = other_phase(medium, temperature, pressure);
     let (temperature, pressure) = (format_si(temperature, TEMPERATURE), format_si(pressure, PRESSURE));
     writeln!(out, "{} at {temperature}, {pressure}{at}\n", layout.paint.strong(&medium.substance.name.text))?;
     for PropertyRow { symbol, name, value, dimension, .. } in rows(properties) {
         let value = if value.is_finite() { format_si(value, dimension) } else { "not known here".to_string() };
         writeln!(out, "  {symbol:<3} {name:<30} {value}")?;
+    }
+    if let Some(phase) = phase {
+        writeln!(out, "\n  Under this pressure it has {} there: these values are beyond its range.", phase)?;
     }
     Ok(())
 }
@@ -99,6 +103,18 @@ pub fn rows(properties: &Properties) -> Vec<PropertyRow> {
     ]
 }
 
+/// What has become of the substance where it is not in the state that its data are for.
+fn other_phase(medium: &Medium<'_>, temperature: f64, pressure: f64) -> Option<&'static str> {
+    // Written limits and computed temperatures may differ in the last digit.
+    const SLACK: f64 = 1e-6;
+    let (boiling, freezing) = (medium.boiling(pressure), medium.freezing(pressure));
+    match medium.is_gas() {
+        true => boiling.filter(|boiling| temperature < boiling - SLACK).map(|_| "condensed"),
+        false if freezing.is_some_and(|freezing| temperature < freezing - SLACK) => Some("frozen"),
+        false => boiling.filter(|boiling| temperature > boiling + SLACK).map(|_| "boiled"),
+    }
+}
+
 fn composition(medium: &Medium<'_>) -> String {
     match medium.substance.fraction {
         Some(_) => format!(", mass fraction {} %", format_number(100.0 * medium.fraction)),
@@ -120,7 +136,8 @@ fn table(medium: &Medium<'_>, pressure: f64, out: &mut dyn Write, layout: Layout
         let temperature = low + (high - low) * f64::from(step) / f64::from(STEPS);
         let number = |value: f64| if value.is_finite() { format_number(value) } else { "-".to_string() };
         let at = format_number(temperature - 273.15);
-        let cells = match medium.properties(temperature, pressure) {
+        let phase = other_phase(medium, temperature, pressure);
+        let cells = match medium.properties(temperature, pressure).filter(|_| phase.is_none()) {
             Some(found) => [
                 at,
                 number(found.density),
@@ -132,7 +149,7 @@ fn table(medium: &Medium<'_>, pressure: f64, out: &mut dyn Write, layout: Layout
             ],
             None => [at, "-".into(), "-".into(), "-".into(), "-".into(), "-".into(), "-".into()],
         };
-        writeln!(out, "{}", line(cells))?;
+        writeln!(out, "{}{}", line(cells), phase.map(|phase| format!("  {phase}")).unwrap_or_default())?;
     }
     Ok(())
 }
