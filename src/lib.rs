@@ -5,8 +5,10 @@
 
 pub mod case;
 pub mod checks;
+pub mod command;
 pub mod physics;
 pub mod quantity;
+pub mod report;
 pub mod substances;
 pub mod syntax;
 #[doc(hidden)]

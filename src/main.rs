@@ -1,1 +1,7 @@
-fn main() {}
+//! The program: reads the command line and calls the library.
+
+use std::process::ExitCode;
+
+fn main() -> ExitCode {
+    deckline::command::run()
+}

@@ -6,6 +6,7 @@ pub mod choices;
 pub mod entries;
 pub mod functions;
 pub mod look_up;
+pub mod print;
 pub mod rows;
 pub mod statements;
 
