@@ -500,6 +500,8 @@ pub struct Requirement {
     pub upper: Option<Compiled>,
     /// Dimension of both sides.
     pub dimension: Dimension,
+    /// Whether both sides are differences of temperatures, not points.
+    pub is_difference: bool,
     /// The left side as syntax.
     pub expression: Expression,
 }

@@ -5,7 +5,7 @@ use super::build::{Point, build};
 use super::compiled::{Compiled, Variable};
 use super::declare::{self, DeclaredEntry};
 use super::expression::{Reference, Scope, Tolerance, Typed, Worker};
-use super::kinds::{Conflict, ConflictKind, Kinds};
+use super::kinds::{Conflict, ConflictKind, Kind, KindVariable, Kinds};
 use super::model::{Case, Name, Origin, Requirement, Substance};
 use super::names::{self, NamedValue, ValueKind};
 use super::sweep::{self, Sweep};
@@ -127,6 +127,7 @@ pub fn resolve(sources: &[Source<'_>], known: Known<'_>) -> Resolution {
     };
     let mut resolution = Resolution::default();
     work_out_values(&mut worker, &mut resolution);
+    let mut requirement_kinds: Vec<Option<KindVariable>> = Vec::new();
     for entry in &entries {
         let bound = bind_entry(&mut worker, entry, known);
         match entry.row.kind {
@@ -135,7 +136,7 @@ pub fn resolve(sources: &[Source<'_>], known: Known<'_>) -> Resolution {
                 let evaluate = |compiled: &Compiled| nominal.evaluate(compiled);
                 resolution.substances.push(super::substance::substance(&mut worker, entry, &bound, &evaluate));
             }
-            EntryKind::Require => add_requirements(&mut worker, entry, &mut resolution),
+            EntryKind::Require => requirement_kinds.extend(add_requirements(&mut worker, entry, &mut resolution)),
             _ => {}
         }
         resolution.entries.push(bound);
@@ -144,6 +145,9 @@ pub fn resolve(sources: &[Source<'_>], known: Known<'_>) -> Resolution {
     resolution.nominal.deviations.resize(worker.tolerances.len(), 0.0);
     let conflicts = worker.kinds.settle();
     worker.findings.extend(conflicts.into_iter().map(|conflict| kind_finding(conflict, sources)));
+    for (requirement, kind) in resolution.requirements.iter_mut().zip(requirement_kinds) {
+        requirement.is_difference = kind.and_then(|kind| worker.kinds.kind(kind)) == Some(Kind::Difference);
+    }
     describe_values(&worker, &mut resolution);
     unsettled_kinds(&mut worker, &resolution);
     unused_names(&mut worker);
@@ -364,8 +368,14 @@ fn together_groups(worker: &Worker<'_, '_>) -> Vec<(Vec<usize>, Place)> {
         .collect()
 }
 
-fn add_requirements<'t>(worker: &mut Worker<'_, 't>, entry: &DeclaredEntry<'t>, resolution: &mut Resolution) {
+/// Adds the requirements of an entry; gives the kind of each.
+fn add_requirements<'t>(
+    worker: &mut Worker<'_, 't>,
+    entry: &DeclaredEntry<'t>,
+    resolution: &mut Resolution,
+) -> Vec<Option<KindVariable>> {
     let base = base_of(entry);
+    let mut kinds = Vec::new();
     for requirement in &entry.requirements {
         let place = entry.place(requirement.span);
         let left = worker.work(&requirement.left, base, Scope::Requirement);
@@ -402,12 +412,14 @@ fn add_requirements<'t>(worker: &mut Worker<'_, 't>, entry: &DeclaredEntry<'t>, 
         }
         let mut bounds = bounds.into_iter().map(|(_, typed)| typed.compiled);
         let (Some(right), upper) = (bounds.next(), bounds.next()) else { continue };
+        kinds.push(left.kind);
         resolution.requirements.push(Requirement {
             place,
             text: requirement.span.of(&entry.entry.text).into(),
             file: entry.file,
             offset: entry.offset,
             dimension: left.dimension.unwrap_or(Dimension::NONE),
+            is_difference: false,
             left: left.compiled,
             comparison: requirement.comparison,
             right,
@@ -415,6 +427,7 @@ fn add_requirements<'t>(worker: &mut Worker<'_, 't>, entry: &DeclaredEntry<'t>, 
             expression: requirement.left.clone(),
         });
     }
+    kinds
 }
 
 fn kind_finding(conflict: Conflict, sources: &[Source<'_>]) -> Finding {

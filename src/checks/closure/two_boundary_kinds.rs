@@ -1,6 +1,7 @@
 //! `two-boundary-kinds`: a boundary that is said to be two things.
 
 use super::parts::kind_word;
+use crate::case::model::BoundaryKind;
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
 use crate::checks::look::finding_of;
 use crate::syntax::{Finding, Level};
@@ -23,7 +24,11 @@ pub const CHECK: Check = Check {
 fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     let mut findings = Vec::new();
     for boundary in &subject.case.boundaries {
-        let [(one, one_place), (other, other_place), ..] = boundary.kinds.as_slice() else { continue };
+        // A face that meets another region may well be a wall.
+        let meets = boundary.kinds.iter().any(|(kind, _)| matches!(kind, BoundaryKind::Meets(_)));
+        let kinds: Vec<_> =
+            boundary.kinds.iter().filter(|(kind, _)| !(meets && matches!(kind, BoundaryKind::Wall { .. }))).collect();
+        let [(one, one_place), (other, other_place), ..] = kinds.as_slice() else { continue };
         let message = format!("`{}` is both `{}` and `{}`.", boundary.name.text, kind_word(one), kind_word(other));
         findings.push(
             finding_of(CHECK.name, weighing.level, &boundary.name, message)
