@@ -1,0 +1,74 @@
+//! Estimates the temperatures of the plates of an upright channel that draws in fluid from below.
+//!
+//! Before: `channel 8 mm by 0.2 m`, both plates `heated by 150 W/m^2`, fluid at 25 degC below.
+//! After: the temperature of the plates' upper edge (Bar-Cohen and Rohsenow 1984, uniform flux).
+
+use super::reach::How;
+use super::root;
+use super::{Found, Question, wall};
+use crate::case::model::Side;
+use crate::physics::convection::{Edge, Surface};
+use crate::physics::correlations::{Chosen, vertical_channel};
+use crate::physics::fluid_state::Transport;
+
+/// The plates' temperatures above fluid drawn in at `inlet` K.
+pub fn plates<'a>(question: &Question<'a>, inlet: f64) -> Option<Found<'a>> {
+    let is_plate = |side: Side| matches!(side, Side::West | Side::East);
+    let active =
+        question.walls.iter().filter(|wall| !wall.is_open && is_plate(wall.piece.side) && wall.condition.is_active());
+    let is_both = active.count() > 1;
+    let mut found = Found::new(question, inlet);
+    found.bulk = inlet;
+    for (index, one) in question.walls.iter().enumerate() {
+        let condition = &one.condition;
+        if one.is_open || !condition.is_active() || condition.held.is_some() {
+            continue;
+        }
+        if condition.is_level() || !is_plate(one.piece.side) {
+            // What no correlation for channels covers: as an upright plate in fluid at the inlet's temperature.
+            let surface = Surface::Upright(question.placement.run);
+            let at = wall::temperature(question.source, question.gravity, surface, condition, inlet)?;
+            found.set_wall(index, &at, at.band);
+            continue;
+        }
+        let (edge, chosen, film, converged) = upper_edge(question, condition.flux, inlet, is_both)?;
+        let how = How {
+            method: "temperature of the plate's upper edge, at which the heat given passes into the fluid drawn in",
+            correlation: Some(chosen.correlation),
+            is_inside_range: chosen.estimate.inside_range,
+            film,
+            holds: question.source.holds_at(film),
+            converged,
+        };
+        found.set_how(index, edge.0, edge.0, (edge.1.min(edge.2), edge.1.max(edge.2)), how);
+    }
+    Some(found)
+}
+
+type Edges = (f64, f64, f64);
+
+/// Temperature of the upper edge: value, and with the correlation's weak and strong edge.
+fn upper_edge(question: &Question<'_>, flux: f64, inlet: f64, is_both: bool) -> Option<(Edges, Chosen, f64, bool)> {
+    let placement = question.placement;
+    let (spacing, height) = (placement.spacing, placement.run);
+    let chosen = |fluid: &Transport| {
+        let number = question.gravity * fluid.expansion.abs() * flux.abs() * spacing.powi(5)
+            / (fluid.conductivity * fluid.kinematic_viscosity * fluid.diffusivity * height);
+        if is_both {
+            Chosen { correlation: &vertical_channel::FLUX_BOTH, estimate: vertical_channel::flux_both(number) }
+        } else {
+            Chosen { correlation: &vertical_channel::FLUX_ONE, estimate: vertical_channel::flux_one(number) }
+        }
+    };
+    let edge_with = |fluid: &Transport, edge: Edge| {
+        inlet + flux * spacing / (fluid.conductivity * edge.of(&chosen(fluid).estimate))
+    };
+    let source = question.source;
+    let first = edge_with(&source.at(inlet), Edge::Value);
+    let residual = |wall: f64| wall - edge_with(&source.at(0.5 * (wall + inlet)), Edge::Value);
+    let solved = root::near(first, 0.1 * (first - inlet).abs() + 1e-4, (1.0, 1e5), 1e-4, residual)?;
+    let film = 0.5 * (solved.at + inlet);
+    let fluid = source.at(film);
+    let edges = (solved.at, edge_with(&fluid, Edge::Low), edge_with(&fluid, Edge::High));
+    Some((edges, chosen(&fluid), film, solved.converged))
+}

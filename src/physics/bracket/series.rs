@@ -1,0 +1,156 @@
+//! Estimates the temperatures of a hot and a cold side that face each other: heat passes from what lies behind the one,
+//! through the fluid, to what lies behind the other, resistances in series.
+//!
+//! Before: `boards` (west) `heated by 180 W`, `skin` (east) `exchanges 6 W/m^2/K with 8 degC`.
+//! After: 180 W puts the skin at 8 degC + 180 W / (6 W/m²/K · area), and the boards above it by the difference at which
+//! the side-heated cavity carries 180 W.
+//!
+//! Thermal resistances in series: Fourier's and Newton's laws; the fluid's by the correlation of the arrangement.
+
+use super::root;
+use super::{Found, Question};
+use crate::physics::conditions::Condition;
+use crate::physics::convection::{Edge, conductance, of_enclosure};
+use crate::physics::correlations::Chosen;
+use crate::physics::fluid_state::Transport;
+use crate::physics::roles::Role;
+
+/// Closeness of a difference, K.
+const TOLERANCE: f64 = 1e-4;
+
+/// One of the two sides.
+struct Sheet<'a> {
+    condition: Condition<'a>,
+    area: f64,
+    /// Index of one of its walls.
+    wall: usize,
+}
+
+impl Sheet<'_> {
+    /// Its temperature when `heat`, W, passes from it into the fluid.
+    fn temperature(&self, heat: f64) -> Option<f64> {
+        self.condition.temperature_at(heat / self.area)
+    }
+
+    /// The heat, W, where nothing but a flux is prescribed.
+    fn fixed(&self) -> Option<f64> {
+        (!self.condition.is_level()).then_some(self.condition.flux * self.area)
+    }
+}
+
+/// The two sides' temperatures and what they rest on; `None` where the level floats or the fluid's properties are not
+/// known, or where a side has several conditions.
+pub fn two_sides<'a>(question: &Question<'a>) -> Option<Found<'a>> {
+    let hot = sheet(question, Role::Hot)?;
+    let cold = sheet(question, Role::Cold)?;
+    let guess = 0.5 * (level(&hot).or_else(|| level(&cold))? + level(&cold).or_else(|| level(&hot))?);
+    let source = question.source;
+    let mut fluid = source.at(guess);
+    let mut result = solve(question, &hot, &cold, &fluid, Edge::Value)?;
+    let mut converged = source.is_constant();
+    let mut film = 0.5 * (result.0 + result.1);
+    // The film temperature of a cavity moves little with the properties taken at it: repeated substitution settles
+    // within a few passes, and is halved where it should swing.
+    for pass in 0..12 {
+        if converged {
+            break;
+        }
+        fluid = source.at(film);
+        result = solve(question, &hot, &cold, &fluid, Edge::Value)?;
+        let next = 0.5 * (result.0 + result.1);
+        converged = (next - film).abs() < 0.02;
+        film = if pass < 4 { next } else { 0.5 * (next + film) };
+    }
+    let (hot_temperature, cold_temperature, chosen) = result;
+    let weak = solve(question, &hot, &cold, &fluid, Edge::Low);
+    let strong = solve(question, &hot, &cold, &fluid, Edge::High);
+    let band = |pick: fn(&(f64, f64, Chosen)) -> f64| {
+        let edges = [weak.as_ref().map_or(f64::NAN, pick), strong.as_ref().map_or(f64::NAN, pick)];
+        (edges[0].min(edges[1]), edges[0].max(edges[1]))
+    };
+    let mut found = Found::new(question, 0.5 * (hot_temperature + cold_temperature));
+    found.method = "heat passes from side to side through the fluid, resistances in series";
+    found.correlation = Some(chosen.correlation);
+    found.is_inside_range = chosen.estimate.inside_range;
+    found.film = film;
+    found.converged = converged;
+    found.set(hot.wall, hot_temperature, band(|result| result.0));
+    found.set(cold.wall, cold_temperature, band(|result| result.1));
+    Some(found)
+}
+
+/// The side of a role; `None` where its walls differ in what holds on them.
+fn sheet<'a>(question: &Question<'a>, role: Role) -> Option<Sheet<'a>> {
+    let mut own =
+        question.walls.iter().enumerate().filter(|(index, _)| question.placement.roles.get(*index) == Some(&role));
+    let (wall, first) = own.next()?;
+    if own.next().is_some() {
+        return None;
+    }
+    Some(Sheet { condition: first.condition, area: first.piece.area, wall })
+}
+
+fn level(sheet: &Sheet<'_>) -> Option<f64> {
+    sheet.condition.anchor()
+}
+
+/// Hot and cold temperature and the correlation, with fixed properties.
+fn solve(
+    question: &Question<'_>,
+    hot: &Sheet<'_>,
+    cold: &Sheet<'_>,
+    fluid: &Transport,
+    edge: Edge,
+) -> Option<(f64, f64, Chosen)> {
+    let placement = question.placement;
+    let chosen = |difference: f64| {
+        let rayleigh = fluid.rayleigh(question.gravity, difference, placement.spacing);
+        if rayleigh.is_finite() { of_enclosure(placement, rayleigh, fluid.prandtl()) } else { None }
+    };
+    // By the inner face of an annulus; for flat sides both are alike.
+    let area = if hot.area < cold.area { hot.area } else { cold.area };
+    let passing = |difference: f64| {
+        chosen(difference).map_or(f64::NAN, |chosen| {
+            conductance(placement, area, fluid.conductivity, edge.of(&chosen.estimate)) * difference
+        })
+    };
+    let carries = |heat: f64| {
+        if heat <= 0.0 {
+            return None;
+        }
+        let residual = |logarithm: f64| passing(logarithm.exp()).ln() - heat.ln();
+        let root = root::near(-0.8 * residual(0.0), 0.3, (-40.0, 14.0), 1e-8, residual)?;
+        Some(root.at.exp())
+    };
+    let (hot_temperature, cold_temperature) = match (hot.fixed(), cold.fixed()) {
+        (Some(_), Some(_)) => return None,
+        (Some(heat), None) => {
+            let cold_temperature = cold.temperature(-heat)?;
+            (cold_temperature + carries(heat)?, cold_temperature)
+        }
+        (None, Some(heat)) => {
+            let hot_temperature = hot.temperature(-heat)?;
+            (hot_temperature, hot_temperature - carries(-heat)?)
+        }
+        (None, None) => {
+            let most = hot.temperature(0.0)? - cold.temperature(0.0)?;
+            if most <= 0.0 {
+                return None;
+            }
+            let left = |difference: f64| {
+                let heat = passing(difference);
+                match (hot.temperature(heat), cold.temperature(-heat)) {
+                    (Some(hot), Some(cold)) => hot - cold - difference,
+                    // More heat than any temperature behind could give or take.
+                    _ if heat.is_nan() => f64::NAN,
+                    _ => -difference - 1.0,
+                }
+            };
+            let root = root::between(0.0, most, TOLERANCE * 1e-2, left)?;
+            let heat = passing(root.at);
+            (hot.temperature(heat)?, cold.temperature(-heat)?)
+        }
+    };
+    let chosen = chosen(hot_temperature - cold_temperature)?;
+    (hot_temperature.is_finite() && cold_temperature.is_finite()).then_some((hot_temperature, cold_temperature, chosen))
+}
