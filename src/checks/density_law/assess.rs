@@ -234,6 +234,11 @@ pub fn temperature(kelvin: f64) -> String {
     format_si(kelvin, TEMPERATURE)
 }
 
+/// The same to a tenth of a degree Celsius, for a property of the substance that is known no better.
+pub fn to_a_tenth(kelvin: f64) -> String {
+    temperature(273.15 + 0.1 * (10.0 * (kelvin - 273.15)).round())
+}
+
 /// A share in per cent, to two digits: "31 %".
 pub fn per_cent(share: f64) -> String {
     let per_cent = 100.0 * share;

@@ -94,8 +94,7 @@ fn at_reference(subject: &Subject<'_>) -> Vec<Finding> {
         {
             let per_cent = |share: f64| format!("{} %", format_number(100.0 * share));
             let message = format!(
-                "{} of {} holds {} of the dissolved substance, and its data hold from {} to {}",
-                substance,
+                "the fraction of {}, {}, lies outside the data of {substance}, which hold from {} to {}",
                 fluid.name.text,
                 per_cent(value.si),
                 per_cent(least),
