@@ -56,14 +56,16 @@ pub fn said(assessed: &Assessed<'_>, value: f64, limit: f64, of: &Drifting, by_f
 
 /// "falls from 0.653 mPa.s at 40 degC to 0.304 mPa.s at 93 degC", where that is the whole change.
 fn course(assessed: &Assessed<'_>, value: f64, of: &Drifting) -> String {
+    let reference = assessed.conditions.reference;
     let (lowest, highest) = assessed.values.covered;
+    let (lowest, highest) = (lowest.min(reference), highest.max(reference));
     let property_at = |temperature: f64| {
         let properties = assessed.medium?.properties(temperature, assessed.conditions.pressure)?;
         Some((of.property)(&properties)).filter(|property| property.is_finite())
     };
-    if let (Some(low), Some(high), Some(reference)) =
-        (property_at(lowest), property_at(highest), property_at(assessed.conditions.reference))
-        && ((high - low) / reference).abs() > 0.98 * value
+    if let (Some(low), Some(high), Some(at_reference)) =
+        (property_at(lowest), property_at(highest), property_at(reference))
+        && ((high - low) / at_reference).abs() > 0.98 * value
     {
         return format!(
             "{} from {} at {} to {} at {}",

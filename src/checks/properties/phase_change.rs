@@ -85,7 +85,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             continue;
         }
         for bound in [&bracket.lowest, &bracket.highest] {
-            let is_slip = slips.iter().any(|slip| slip.literal.is_some() && slip.literal == bound.literal);
+            let is_slip = slip::is_slip_of_bound(&slips, bound);
             if let Some(phase) = phase_at(&medium, bound.value, state.pressure).filter(|_| !is_slip) {
                 let level = level(&medium, bound, state, &region.geometry, case.gravity.magnitude, weighing.level);
                 findings.push(of_bound(

@@ -39,7 +39,8 @@ fn is_bare(value: &Value) -> bool {
 
 /// 85 for 85 %.
 fn per_cent(value: &Value, name: &str, owner: &str) -> Option<Slip> {
-    if !(is_bare(value) && value.si > 1.0 && value.si <= 100.0) {
+    // Little over 1 is a share that is wrong, and no per cent that anyone would write.
+    if !(is_bare(value) && value.si >= 2.0 && value.si <= 100.0) {
         return None;
     }
     let meant = format!("{} %", rewritten(value.si));
