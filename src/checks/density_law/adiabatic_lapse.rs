@@ -66,3 +66,129 @@ fn switch_on(place: crate::syntax::Place) -> Fix {
         sure: false,
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn a_high_hall_of_nearly_one_temperature() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law boussinesq   #! adiabatic-lapse "cools by 0.29"
+region tank
+    box         20 m by 20 m by 30 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     21 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     19 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_cleanroom_to_a_hundredth() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law boussinesq   #! adiabatic-lapse
+region tank
+    box         2 m by 2 m by 1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     20.01 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     19.99 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn computed_it_is_not_left_out() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law boussinesq
+region tank
+    box         20 m by 20 m by 30 m
+    filled with content
+    pressure-work on
+boundary warm of tank
+    side        west
+    wall
+    held at     21 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     19 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn an_ordinary_room() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law boussinesq
+region tank
+    box         5 m by 4 m by 3 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     25 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     15 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_switches_it_on() {
+        let text = r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law boussinesq
+region tank
+    box         20 m by 20 m by 30 m
+    filled with content
+    pressure-work off
+boundary warm of tank
+    side        west
+    wall
+    held at     21 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     19 degC
+"##;
+        assert!(after_fix(CHECK.name, text).contains("pressure-work on"), "{}", after_fix(CHECK.name, text));
+    }
+}

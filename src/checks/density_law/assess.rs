@@ -3,6 +3,8 @@
 
 use super::criterion::{Conditions, CriterionValues, evaluate_at, of_constants};
 use crate::case::model::{Case, DensityLaw, Fluid, Region};
+use crate::checks::properties::slip::is_slip_of_bound;
+use crate::checks::properties::slip_of_state;
 use crate::checks::{Check, Subject, Weighing};
 use crate::physics::model::{Bracket, RegionPhysics};
 use crate::quantity::dimension_names::TEMPERATURE;
@@ -56,8 +58,14 @@ pub fn assessed<'a>(subject: &Subject<'a>, law: &[DensityLaw]) -> Vec<Assessed<'
     let (case, physics) = (subject.case, subject.physics);
     // Without gravity there is no buoyancy to be misstated. Written so that an unknown gravity says nothing either.
     let acts = case.gravity.magnitude > 0.0;
+    let slips = slip_of_state::slips(subject);
     let pairs = case.regions.iter().zip(&physics.regions).filter(|_| acts);
-    pairs.filter_map(|(region, physics)| assess(case, region, physics, law)).collect()
+    let known = pairs.filter(|(_, physics)| {
+        let bounds = physics.bracket.iter().flat_map(|bracket| [&bracket.lowest, &bracket.highest]);
+        // What follows from a slip of unit, or from a temperature that cannot be, says nothing.
+        bounds.into_iter().all(|bound| bound.value > 0.0 && !is_slip_of_bound(&slips, bound))
+    });
+    known.filter_map(|(region, physics)| assess(case, region, physics, law)).collect()
 }
 
 fn assess<'a>(
@@ -232,6 +240,11 @@ fn rests_on(bracket: &Bracket, weight: &Weight) -> String {
 /// A temperature as people read it.
 pub fn temperature(kelvin: f64) -> String {
     format_si(kelvin, TEMPERATURE)
+}
+
+/// The same to a tenth of a degree Celsius, for a property of the substance that is known no better.
+pub fn to_a_tenth(kelvin: f64) -> String {
+    temperature(273.15 + 0.1 * (10.0 * (kelvin - 273.15)).round())
 }
 
 /// A share in per cent, to two digits: "31 %".

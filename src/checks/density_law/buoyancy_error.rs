@@ -26,7 +26,10 @@ pub static CHECK: Check = Check {
 /// Its number.
 pub static NUMBER: Weighed = Weighed { check: &CHECK, symbol: "buoyancy error", value: |_, values| PICK(values) };
 
-const PICK: fn(&CriterionValues) -> f64 = |values| values.buoyancy_error;
+const PICK: fn(&CriterionValues) -> f64 = |values| {
+    // Where α changes sign, `density-maximum` speaks, and a share of a vanishing buoyancy says nothing.
+    if values.densest_at.is_finite() { f64::NAN } else { values.buoyancy_error }
+};
 
 /// By how much the linear law is off, and where.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -73,7 +76,18 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             |(bound, verb)| format!("{} {verb} {}", bound.set_by, temperature(at)),
         );
         let side = if at >= reference { "above" } else { "below" };
-        let amount = if region.values.buoyancy_is_understated { "too little" } else { "too much" };
+        let more = if region.values.buoyancy_is_understated { "more" } else { "less" };
+        // At the end that is farther from the reference, the share is that of the linear buoyancy there.
+        let is_farther_end = (at - reference).abs() + 1e-6 >= (bracket.lowest.value - reference).abs()
+            && (at - reference).abs() + 1e-6 >= (bracket.highest.value - reference).abs();
+        let off = if is_farther_end {
+            format!("buoyancy there is {} {more} than the linear law gives", per_cent(value))
+        } else {
+            format!(
+                "buoyancy there is {more} than the linear law gives, by {} of the greatest that it gives",
+                per_cent(value)
+            )
+        };
         let centred = remedy::centred(region, PICK, first);
         let move_reference = centred.as_ref().and_then(|_| {
             let (middle, _) = remedy::at_mid_span(region)?;
@@ -81,19 +95,149 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         });
         Said {
             message: format!(
-                "{place}, {} {side} the reference of {}: the linear law gives {amount} buoyancy there, by {} of the greatest that it gives in {}; it is held to {}",
+                "{place}, {} {side} the reference of {}: {off}; it is held to {}",
                 format_difference((at - reference).abs()),
                 region.fluid.name.text,
-                per_cent(value),
-                region.region.name.text,
                 per_cent(limit),
             ),
-            remedy: remedy::join(&[
-                Some(remedy::by_other_law(region)),
-                centred,
-                remedy::narrower(region, PICK, first),
-            ]),
+            remedy: remedy::join(&[Some(remedy::by_other_law(region)), centred, remedy::narrower(region, PICK, first)]),
             fixes: move_reference.into_iter().chain(remedy::to_other_law(region)).collect(),
         }
     })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn a_lid_far_above_the_reference() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   40 degC
+    density-law boussinesq   #! buoyancy-error "53 K above the reference of content: buoyancy there is 43 % more than the linear law gives"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     93 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     40 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_gas_far_above_the_reference() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law boussinesq   #! buoyancy-error "17 % less than"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     80 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn within() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   30 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     50 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     10 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_stated_expansion_is_the_slope_of_the_law() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   40 degC
+    density-law boussinesq
+    expansion   5e-4 1/K
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     80 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     40 degC
+"##,
+        );
+    }
+
+    /// ρ = p M/(R T) about T0 gives α = 1/T0 and an error of αx/(1 + αx) of the linear buoyancy at x = T − T0.
+    #[test]
+    fn an_ideal_gas_by_hand() {
+        use crate::substances::{Medium, library};
+        let air = Medium { substance: library::find("air").unwrap(), fraction: 0.0 };
+        let values = crate::checks::density_law::evaluate(&air, 300.0, 300.0, 360.0, 1e5, 1.0, 9.81);
+        assert!((values.buoyancy_error - 0.2 / 1.2).abs() < 1e-6, "{}", values.buoyancy_error);
+        assert_eq!(values.buoyancy_error_at, 360.0);
+        assert!(!values.buoyancy_is_understated);
+    }
+
+    #[test]
+    fn a_reference_at_mid_span_where_it_serves() {
+        let text = r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     70 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##;
+        assert!(after_fix(CHECK.name, text).contains("reference   45 degC"), "{}", after_fix(CHECK.name, text));
+    }
 }

@@ -27,12 +27,12 @@ pub static CHECK: Check = Check {
 pub static NUMBER: Weighed = Weighed { check: &CHECK, symbol: "Δp/p0", value: pressure_rise };
 
 fn pressure_rise(assessed: &Assessed<'_>, values: &CriterionValues) -> f64 {
-    let is_gas = assessed.medium.is_some_and(|medium| medium.is_gas());
-    if is_gas && is_sealed(assessed.case, assessed.region) {
-        rise(values.mean, assessed.conditions.reference)
-    } else {
-        f64::NAN
-    }
+    if is_sealed_gas(assessed) { rise(values.mean, assessed.conditions.reference) } else { f64::NAN }
+}
+
+/// Whether the region holds a gas that cannot leave it.
+pub fn is_sealed_gas(assessed: &Assessed<'_>) -> bool {
+    assessed.medium.is_some_and(|medium| medium.is_gas()) && is_sealed(assessed.case, assessed.region)
 }
 
 /// |T_mean / T0 − 1|, what pressure changes by at constant volume and mass.
@@ -81,4 +81,133 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             fixes: remedy::to_other_law(region).into_iter().collect(),
         }
     })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn a_sealed_cabinet_that_warms() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   15 degC
+    density-law boussinesq   #! closed-gas-pressure "the pressure rises by 10 %"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     55 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     35 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_cold_store_sealed_warm() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law boussinesq   #! closed-gas-pressure "falls by"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     10 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     -20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn an_opening_lets_it_out() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   15 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     55 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     35 degC
+boundary vent of tank
+    side        top
+    opening
+"##,
+        );
+    }
+
+    #[test]
+    fn a_liquid_is_another_matter() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   15 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     55 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     35 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn sealed_at_the_mean() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   30 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
 }

@@ -1,9 +1,9 @@
 //! `conductivity-drift`: the change of conductivity over the span of temperatures.
 
 use super::assess::Weighed;
-use super::criterion::CriterionValues;
-use super::drift;
+use super::drift::{self, Drifting};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
+use crate::quantity::dimension_names::THERMAL_CONDUCTIVITY;
 use crate::syntax::{Finding, Level};
 
 /// The check.
@@ -22,13 +22,95 @@ pub static CHECK: Check = Check {
 };
 
 /// Its number.
-pub static NUMBER: Weighed = Weighed { check: &CHECK, symbol: "δk", value: |_, values| PICK(values) };
+pub static NUMBER: Weighed = Weighed { check: &CHECK, symbol: "δk", value: |_, values| (DRIFTING.drift)(values) };
 
-const PICK: fn(&CriterionValues) -> f64 = |values| values.conductivity_drift;
+const DRIFTING: Drifting = Drifting {
+    name: "conductivity",
+    dimension: THERMAL_CONDUCTIVITY,
+    drift: |values| values.conductivity_drift,
+    property: |properties| properties.conductivity,
+};
 
 fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     NUMBER.findings(subject, weighing, |region, value, limit| {
-        let by_function = "a conductivity that follows temperature".to_string();
-        drift::said(region, value, limit, "conductivity", by_function, PICK, |properties| properties.conductivity)
+        drift::said(region, value, limit, &DRIFTING, "a conductivity that follows temperature".to_string())
     })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn hot_air() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   200 degC
+    density-law boussinesq   #! conductivity-drift "rises from"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     300 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     100 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_tracer_of_steam() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   steam
+    reference   200 degC
+    density-law boussinesq   #! conductivity-drift
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     250 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     150 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn water() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   25 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     30 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
 }

@@ -70,3 +70,131 @@ fn finding(region: &Assessed<'_>, weighing: &Weighing) -> Option<Finding> {
     finding.fixes.push(remedy::change_law(law, DensityLaw::Boussinesq, false));
     Some(with_ends(finding, bracket))
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn natural_convection() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   30 degC
+    density-law constant   #! constant-with-buoyancy "buoyancy alone moves the fluid"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn mixed_convection() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   30 degC
+    density-law constant   #! constant-with-buoyancy "Ri is"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+    moves at    0.5 m/s
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn forced_convection() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   30 degC
+    density-law constant
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+    moves at    30 m/s
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn without_gravity() {
+        expect_of(
+            CHECK.name,
+            r##"
+case
+    gravity none
+fluid content
+    substance   air
+    reference   30 degC
+    density-law constant
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_takes_the_linear_law() {
+        let text = r##"
+fluid content
+    substance   air
+    reference   30 degC
+    density-law constant
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##;
+        assert!(after_fix(CHECK.name, text).contains("density-law boussinesq"), "{}", after_fix(CHECK.name, text));
+    }
+}

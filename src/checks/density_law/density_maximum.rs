@@ -1,6 +1,6 @@
 //! `density-maximum`: the substance is densest at a temperature within the span, so buoyancy changes its direction there.
 
-use super::assess::{assessed, temperature, with_ends};
+use super::assess::{assessed, temperature, to_a_tenth, with_ends};
 use super::criterion::Sample;
 use super::remedy;
 use crate::case::model::DensityLaw;
@@ -55,13 +55,13 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     let turning = regions.iter().filter(|region| region.values.densest_at.is_finite());
     turning
         .map(|region| {
-            let at = region.values.densest_at;
+            let at = to_a_tenth(region.values.densest_at);
             let bracket = region.bracket;
             let is_sure = region.band.iter().flatten().all(|corner| corner.densest_at.is_finite());
             let message = format!(
                 "{} is densest at {}, and {} spans {} to {}: fluid on either side of that is lighter, where the linear law has buoyancy change its sign at the reference alone{}",
                 region.fluid.name.text,
-                temperature(at),
+                at,
                 region.region.name.text,
                 temperature(bracket.lowest.value),
                 temperature(bracket.highest.value),
@@ -71,11 +71,159 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             let mut finding = Finding::new(CHECK.name, level, region.place(), message)
                 .remedy(remedy::join(&[
                     Some("`density-law variable`".to_string()),
-                    Some(format!("temperatures all above or all below {}", temperature(at))),
+                    Some(format!("temperatures all above or all below {at}")),
                 ]))
                 .about(&*region.region.name.text);
             finding.fixes.extend(remedy::to_other_law(region));
             with_ends(finding, bracket)
         })
         .collect()
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn a_pond_under_ice() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   4 degC
+    density-law boussinesq   #! density-maximum "densest at 4 degC"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     8 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     0 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_cold_store() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   8 degC
+    density-law boussinesq   #! density-maximum "spans 2 degC to 14 degC"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     14 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     2 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn above_it() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   8 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     14 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     5 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn below_it() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   2 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     3.5 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     0.5 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_variable_law_follows_it() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   4 degC
+    density-law variable
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     8 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     0 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_changes_the_law() {
+        let text = r##"
+fluid content
+    substance   water
+    reference   4 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     8 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     0 degC
+"##;
+        assert!(after_fix(CHECK.name, text).contains("density-law variable"), "{}", after_fix(CHECK.name, text));
+    }
 }

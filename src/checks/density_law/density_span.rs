@@ -54,3 +54,180 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         }
     })
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn the_case_s_own_numbers() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   25 degC at 0.79 bar
+    density-law boussinesq   #! density-span "αΔT is 0.1509"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     70 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     25 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn beyond_twice_the_limit() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   100 degC
+    density-law boussinesq   #! density-span "held to 0.2"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     180 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn within() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   30 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     42 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     18 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn another_law_is_not_weighed() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   25 degC
+    density-law ideal-gas
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     70 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     25 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn without_gravity_nothing_is_misstated() {
+        expect_of(
+            CHECK.name,
+            r##"
+case
+    gravity none
+fluid content
+    substance   air
+    reference   25 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     70 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     25 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_changes_the_law() {
+        let text = r##"
+fluid content
+    substance   air
+    reference   25 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     70 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     25 degC
+"##;
+        assert!(after_fix(CHECK.name, text).contains("density-law ideal-gas"), "{}", after_fix(CHECK.name, text));
+    }
+
+    #[test]
+    fn the_advice_is_within_the_limit() {
+        let text = r##"
+
+fluid content
+    substance   air
+    reference   25 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     70 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     25 degC
+"##;
+        let found = crate::testing::findings(text);
+        let advice = found.iter().find(|finding| finding.check == CHECK.name).map(|finding| finding.remedy.clone());
+        assert_eq!(advice.as_deref(), Some("`density-law ideal-gas`, or boundary warm below 54.8 degC."));
+        // 29.8 K / 298.15 K is 0.09995, 29.9 K would be 0.1003.
+        expect_of(CHECK.name, &text.replace("70 degC", "54.8 degC"));
+    }
+}

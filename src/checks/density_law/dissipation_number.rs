@@ -54,3 +54,106 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         fixes: Vec::new(),
     })
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn a_column_of_air_as_high_as_a_mountain() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   10 degC
+    density-law boussinesq   #! dissipation-number "over the 4000 m"
+region tank
+    box         5 km by 5 km by 4 km
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     20 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     0 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn of_heavy_gas() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   carbon_dioxide
+    reference   20 degC
+    density-law boussinesq   #! dissipation-number
+region tank
+    box         5 km by 5 km by 3 km
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     30 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     10 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn computed_it_is_not_left_out() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   10 degC
+    density-law boussinesq
+region tank
+    box         5 km by 5 km by 4 km
+    filled with content
+    viscous-heating on
+boundary warm of tank
+    side        west
+    wall
+    held at     20 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     0 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_room() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   30 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+}

@@ -1,9 +1,10 @@
 //! What the four drift checks share: the change of a property over the span.
 
-use super::assess::{Assessed, Said, temperature};
+use super::assess::{Assessed, Said, per_cent, temperature};
 use super::criterion::{CriterionValues, Sample};
 use super::remedy;
-use crate::quantity::display::format_number;
+use crate::quantity::Dimension;
+use crate::quantity::display::format_si;
 use crate::substances::Properties;
 
 /// (greatest − least) / |value at T0|, the value at T0 counted among them: the solver holds the property at that value,
@@ -19,50 +20,61 @@ pub fn over_span(samples: &[Sample], reference: &Properties, of: fn(&Properties)
     if count == 0 || at_reference == 0.0 { f64::NAN } else { (greatest - least) / at_reference.abs() }
 }
 
-/// The words of a drift finding. `name` is the property's; `by_function` the advice that lets it follow temperature;
-/// `pick` takes the drift from the criteria and `of` the property from the properties.
-pub fn said(
-    assessed: &Assessed<'_>,
-    value: f64,
-    limit: f64,
-    name: &str,
-    by_function: String,
-    pick: fn(&CriterionValues) -> f64,
-    of: fn(&Properties) -> f64,
-) -> Said {
-    let bracket = assessed.bracket;
-    let conditions = &assessed.conditions;
-    let ratio = assessed.medium.and_then(|medium| {
-        let (lowest, highest) = assessed.values.covered;
-        let low = of(&medium.properties(lowest, conditions.pressure)?);
-        let high = of(&medium.properties(highest, conditions.pressure)?);
-        Some((lowest, highest, high / low))
-    });
-    let change = match ratio {
-        Some((lowest, highest, ratio)) if ratio.is_finite() && ratio > 0.0 => format!(
-            "; from {} to {} it {} by a factor {}",
-            temperature(lowest),
-            temperature(highest),
-            if ratio < 1.0 { "falls" } else { "rises" },
-            format_number(if ratio < 1.0 { 1.0 / ratio } else { ratio })
-        ),
-        _ => String::new(),
-    };
+/// A property that may drift: its words, and how to take it.
+#[derive(Clone, Copy, Debug)]
+pub struct Drifting {
+    /// Its name.
+    pub name: &'static str,
+    /// Its dimension.
+    pub dimension: Dimension,
+    /// Its drift, from the criteria.
+    pub drift: fn(&CriterionValues) -> f64,
+    /// Itself, from the properties.
+    pub property: fn(&Properties) -> f64,
+}
+
+/// The words of a drift finding; `by_function` is the advice that lets the property follow temperature.
+pub fn said(assessed: &Assessed<'_>, value: f64, limit: f64, of: &Drifting, by_function: String) -> Said {
+    let name = of.name;
     Said {
         message: format!(
-            "the {name} of {} changes by {} % of its value at the reference, {}, between {} and {}{change}; a constant {name} is held to {} %",
+            "the {name} of {} {}, by {} of its value at the reference, {}; held constant, it is taken to {}",
             assessed.fluid.name.text,
-            format_number(100.0 * value),
-            temperature(conditions.reference),
-            temperature(bracket.lowest.value),
-            temperature(bracket.highest.value),
-            format_number(100.0 * limit),
+            course(assessed, value, of),
+            per_cent(value),
+            temperature(assessed.conditions.reference),
+            per_cent(limit),
         ),
         remedy: remedy::join(&[
             Some(by_function),
-            remedy::centred(assessed, pick, limit),
-            remedy::narrower(assessed, pick, limit),
+            remedy::centred(assessed, of.drift, limit),
+            remedy::narrower(assessed, of.drift, limit),
         ]),
         fixes: Vec::new(),
     }
+}
+
+/// "falls from 0.653 mPa.s at 40 degC to 0.304 mPa.s at 93 degC", where that is the whole change.
+fn course(assessed: &Assessed<'_>, value: f64, of: &Drifting) -> String {
+    let reference = assessed.conditions.reference;
+    let (lowest, highest) = assessed.values.covered;
+    let (lowest, highest) = (lowest.min(reference), highest.max(reference));
+    let property_at = |temperature: f64| {
+        let properties = assessed.medium?.properties(temperature, assessed.conditions.pressure)?;
+        Some((of.property)(&properties)).filter(|property| property.is_finite())
+    };
+    if let (Some(low), Some(high), Some(at_reference)) =
+        (property_at(lowest), property_at(highest), property_at(reference))
+        && ((high - low) / at_reference).abs() > 0.98 * value
+    {
+        return format!(
+            "{} from {} at {} to {} at {}",
+            if high < low { "falls" } else { "rises" },
+            format_si(low, of.dimension),
+            temperature(lowest),
+            format_si(high, of.dimension),
+            temperature(highest),
+        );
+    }
+    format!("changes between {} and {}", temperature(lowest), temperature(highest))
 }

@@ -1,9 +1,9 @@
 //! `heat-capacity-drift`: the change of heat capacity over the span of temperatures.
 
 use super::assess::Weighed;
-use super::criterion::CriterionValues;
-use super::drift;
+use super::drift::{self, Drifting};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
+use crate::quantity::dimension_names::SPECIFIC_HEAT_CAPACITY;
 use crate::syntax::{Finding, Level};
 
 /// The check.
@@ -22,13 +22,95 @@ pub static CHECK: Check = Check {
 };
 
 /// Its number.
-pub static NUMBER: Weighed = Weighed { check: &CHECK, symbol: "δcp", value: |_, values| PICK(values) };
+pub static NUMBER: Weighed = Weighed { check: &CHECK, symbol: "δcp", value: |_, values| (DRIFTING.drift)(values) };
 
-const PICK: fn(&CriterionValues) -> f64 = |values| values.heat_capacity_drift;
+const DRIFTING: Drifting = Drifting {
+    name: "heat capacity",
+    dimension: SPECIFIC_HEAT_CAPACITY,
+    drift: |values| values.heat_capacity_drift,
+    property: |properties| properties.heat_capacity,
+};
 
 fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     NUMBER.findings(subject, weighing, |region, value, limit| {
-        let by_function = "a heat capacity that follows temperature".to_string();
-        drift::said(region, value, limit, "heat capacity", by_function, PICK, |properties| properties.heat_capacity)
+        drift::said(region, value, limit, &DRIFTING, "a heat capacity that follows temperature".to_string())
     })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn oil() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   engine_oil
+    reference   80 degC
+    density-law boussinesq   #! heat-capacity-drift "heat capacity of content rises"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     140 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     40 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn carbon_dioxide() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   carbon_dioxide
+    reference   100 degC
+    density-law boussinesq   #! heat-capacity-drift
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     200 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     0 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn water() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   25 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     90 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     5 degC
+"##,
+        );
+    }
 }

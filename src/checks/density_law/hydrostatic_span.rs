@@ -48,3 +48,81 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         fixes: remedy::to_other_law(region).into_iter().collect(),
     })
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn a_shaft() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   15 degC
+    density-law boussinesq   #! hydrostatic-span "over the 900 m of tank"
+region tank
+    box         5 m by 5 m by 900 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     20 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     10 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_heavy_gas_sooner() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   carbon_dioxide
+    reference   20 degC
+    density-law boussinesq   #! hydrostatic-span
+region tank
+    box         5 m by 5 m by 600 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     30 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     10 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_shaft_of_water() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   15 degC
+    density-law boussinesq
+region tank
+    box         5 m by 5 m by 900 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     15.2 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     14.8 degC
+"##,
+        );
+    }
+}

@@ -77,3 +77,127 @@ fn finding(subject: &Subject<'_>, region: &Assessed<'_>, level: Level) -> Option
     finding.fixes.push(Fix { title, edits, sure });
     Some(finding)
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn a_room_as_an_ideal_gas() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law ideal-gas   #! law-heavier-than-needed "density-span comes nearest"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     25 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     15 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_tank_to_a_kelvin() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   20 degC
+    density-law variable   #! law-heavier-than-needed
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     20.5 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     19.5 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_hot_plate_needs_it() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law ideal-gas
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     80 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_density_maximum_needs_it() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   4 degC
+    density-law variable
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     6 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     2 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_takes_the_lighter_law() {
+        let text = r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law ideal-gas
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     25 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     15 degC
+"##;
+        assert!(after_fix(CHECK.name, text).contains("density-law boussinesq"), "{}", after_fix(CHECK.name, text));
+    }
+}

@@ -61,3 +61,96 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         }
     })
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn a_jet() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   30 degC
+    density-law boussinesq   #! low-mach "50 m/s (given)"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+boundary jet of tank
+    side        bottom
+    inlet
+    enters at   50 m/s
+    carries     30 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_fast_jet() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   30 degC
+    density-law boussinesq   #! low-mach "held to 0.3"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+boundary jet of tank
+    side        bottom
+    inlet
+    enters at   120 m/s
+    carries     30 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_draught() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   30 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+boundary jet of tank
+    side        bottom
+    inlet
+    enters at   2 m/s
+    carries     30 degC
+"##,
+        );
+    }
+}

@@ -79,3 +79,127 @@ fn won_by(subject: &Subject<'_>, region: &Assessed<'_>, middle: f64) -> Vec<Stri
     }
     won
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn at_the_cold_end() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   20 degC   #! reference-off-centre "at 45 degC buoyancy-error is"
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     70 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn at_the_hot_end() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   water
+    reference   70 degC   #! reference-off-centre "at 55 degC"
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     70 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     40 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn where_no_verdict_changes() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   25 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn at_mid_span() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   45 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     70 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_moves_it() {
+        let text = r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     70 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##;
+        assert!(after_fix(CHECK.name, text).contains("reference   45 degC"), "{}", after_fix(CHECK.name, text));
+    }
+}

@@ -2,7 +2,7 @@
 
 use super::assess::{assessed, temperature, with_ends};
 use super::reference::{Span, span_of};
-use super::remedy;
+use super::{closed_gas_pressure, remedy};
 use crate::case::model::DensityLaw;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::display::format_difference;
@@ -56,7 +56,10 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
                 .remedy(format!("A reference at mid-span, {}.", temperature(middle)))
                 .about(&*fluid.name.text);
             let rests_on_estimate = lowest.estimate.is_some() || highest.estimate.is_some();
-            let is_certain = !rests_on_estimate && !states_a_property(fluid);
+            // A sealed gas may have its reference where it was sealed in.
+            let own = || regions.iter().filter(|region| std::ptr::eq(region.fluid, fluid));
+            let is_certain =
+                !rests_on_estimate && !states_a_property(fluid) && !own().any(closed_gas_pressure::is_sealed_gas);
             finding.fixes.extend(remedy::move_reference(fluid, middle, is_certain));
             Some(
                 regions
@@ -82,4 +85,153 @@ fn states_a_property(fluid: &crate::case::model::Fluid) -> bool {
     ]
     .into_iter()
     .any(Option::is_some)
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::{after_fix, expect_of};
+
+    #[test]
+    fn above() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   50 degC   #! reference-outside-span "10 K above the highest temperature that the fluid comes to, 40 degC (boundary warm)"
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn below() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   0 degC   #! reference-outside-span "20 K below the lowest"
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn at_an_end() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   20 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_end_in_another_unit() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid content
+    substance   air
+    reference   68 degF
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn the_fix_moves_it_in_its_own_unit() {
+        let text = r##"
+fluid content
+    substance   air
+    reference   130 degF
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##;
+        assert!(after_fix(CHECK.name, text).contains("reference   86 degF"), "{}", after_fix(CHECK.name, text));
+    }
+
+    #[test]
+    fn a_name_keeps_its_value() {
+        let text = r##"
+given
+    T_out = 0 degC
+
+fluid content
+    substance   air
+    reference   T_out
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##;
+        assert!(after_fix(CHECK.name, text).contains("T_out = 0 degC"), "{}", after_fix(CHECK.name, text));
+    }
 }

@@ -61,6 +61,20 @@ impl Must {
             Must::BeATilt => "must lie between 0 deg and 180 deg",
         }
     }
+
+    fn remedy(self) -> &'static str {
+        match self {
+            Must::BeAbove0 => "",
+            Must::NotBeBelow0 => "A magnitude; which way it goes, the statement says.",
+            Must::BeAboveAbsoluteZero => "Perhaps another unit was meant.",
+            Must::BeAShare => "A share between 0 and 1, or a percentage with its sign: 85 %.",
+            Must::BeAtLeast1 => "The ratio of a cell to the one before it, nearer the wall: 1.15.",
+            Must::BeWhole => "A whole number.",
+            Must::BeATilt => {
+                "The angle of the hot plate against the horizontal: 0 deg is heated from below, 90 deg from the side."
+            }
+        }
+    }
 }
 
 /// A value, what it is, whose it is and what it must be.
@@ -79,7 +93,8 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         .map(|held| {
             let message =
                 format!("the {} of {}, {}, {}", held.name, held.of, as_written(held.value), held.must.words());
-            Finding::new(CHECK.name, weighing.level, held.value.origin.place, message).about(held.of)
+            let finding = Finding::new(CHECK.name, weighing.level, held.value.origin.place, message);
+            finding.remedy(held.must.remedy()).about(held.of)
         })
         .collect();
     findings.extend(subject.case.regions.iter().filter_map(|region| turned_annulus(region, weighing.level)));

@@ -28,14 +28,17 @@ pub static CHECK: Check = Check {
 };
 
 fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
-    let mut findings = at_reference(subject);
+    let slips = slip::slips(subject);
+    let mut findings = at_reference(subject, &slips);
     for (case_region, region) in subject.case.regions.iter().zip(&subject.physics.regions) {
         let (Some(state), Some(bracket)) = (&region.fluid, &region.bracket) else { continue };
         let Some(fluid) = subject.case.fluids.get(state.index) else { continue };
         let Some(medium) = Medium::of(subject.case, fluid) else { continue };
         for bound in [&bracket.lowest, &bracket.highest] {
             let changes_phase = phase_change::phase_at(&medium, bound.value, state.pressure).is_some();
-            if medium.holds_at(bound.value) || !bound.value.is_finite() || changes_phase {
+            // Absolute zero and below is `not-physical`; a slip of unit is no temperature of the fluid.
+            let is_meant = bound.value > 0.0 && !slip::is_slip_of_bound(&slips, bound);
+            if medium.holds_at(bound.value) || changes_phase || !is_meant {
                 continue;
             }
             let is_sure = bound.estimate.is_none() || !(medium.holds_at(bound.band.0) || medium.holds_at(bound.band.1));
@@ -62,13 +65,12 @@ fn beyond(bound: &Bound, medium: &Medium<'_>, level: Level, region: crate::synta
 }
 
 /// The reference and the fraction of each fluid.
-fn at_reference(subject: &Subject<'_>) -> Vec<Finding> {
-    let slips = slip::slips(subject);
+fn at_reference(subject: &Subject<'_>, slips: &[slip::Slip]) -> Vec<Finding> {
     let mut findings = Vec::new();
     for fluid in &subject.case.fluids {
         let Some(medium) = Medium::of(subject.case, fluid) else { continue };
         let pressure = reference_pressure(subject.case, fluid);
-        let speaks = |value: &&Value| value.is_known() && !slip::is_slip(&slips, value);
+        let speaks = |value: &&Value| value.is_known() && !slip::is_slip(slips, value);
         let substance = &medium.substance.name.text;
         if let Some(value) = fluid.reference_temperature.as_ref().filter(speaks)
             && !medium.holds_at(value.si)
@@ -94,8 +96,7 @@ fn at_reference(subject: &Subject<'_>) -> Vec<Finding> {
         {
             let per_cent = |share: f64| format!("{} %", format_number(100.0 * share));
             let message = format!(
-                "{} of {} holds {} of the dissolved substance, and its data hold from {} to {}",
-                substance,
+                "the fraction of {}, {}, lies outside the data of {substance}, which hold from {} to {}",
                 fluid.name.text,
                 per_cent(value.si),
                 per_cent(least),

@@ -2,7 +2,7 @@
 
 use super::slip;
 use super::stated::reference_pressure;
-use crate::checks::density_law::assess::temperature;
+use crate::checks::density_law::assess::{temperature, to_a_tenth};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::physics::model::{Bound, FluidState, Geometry};
 use crate::quantity::dimension_names::PRESSURE;
@@ -85,7 +85,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             continue;
         }
         for bound in [&bracket.lowest, &bracket.highest] {
-            let is_slip = slips.iter().any(|slip| slip.literal.is_some() && slip.literal == bound.literal);
+            let is_slip = slip::is_slip_of_bound(&slips, bound);
             if let Some(phase) = phase_at(&medium, bound.value, state.pressure).filter(|_| !is_slip) {
                 let level = level(&medium, bound, state, &region.geometry, case.gravity.magnitude, weighing.level);
                 findings.push(of_bound(
@@ -143,13 +143,13 @@ fn of_bound(
 }
 
 fn sentence(medium: &Medium<'_>, phase: Phase) -> String {
-    format!("{} {} at {}", medium.substance.name.text, phase.verb, temperature(phase.at))
+    format!("{} {} at {}", medium.substance.name.text, phase.verb, to_a_tenth(phase.at))
 }
 
 fn remedy(phase: Phase) -> String {
     match phase.verb {
-        "boils" => format!("Temperatures below {}, or a higher pressure.", temperature(phase.at)),
-        verb => format!("Temperatures above {}, where it no longer {verb}.", temperature(phase.at)),
+        "boils" => format!("Temperatures below {}, or a higher pressure.", to_a_tenth(phase.at)),
+        verb => format!("Temperatures above {}, where it no longer {verb}.", to_a_tenth(phase.at)),
     }
 }
 

@@ -87,7 +87,7 @@ fluid bath
 fluid oil
     substance  engine_oil
     reference  40 degC
-    viscosity  0.84 Pa.s   #! property-elsewhere "at 20 degC"
+    viscosity  0.84 Pa.s   #! property-elsewhere "at 19 degC"
 "##,
         );
     }

@@ -4,6 +4,7 @@
 use super::{slip_of_number, slip_of_property, slip_of_size, slip_of_state};
 use crate::case::model::Value;
 use crate::checks::Subject;
+use crate::physics::model::Bound;
 use crate::syntax::{Edit, Fix, Level, Place};
 
 /// A value that was probably meant in another unit.
@@ -62,6 +63,13 @@ pub fn is_slip(slips: &[Slip], value: &Value) -> bool {
     slips.iter().any(|slip| {
         slip.place == value.origin.place || (slip.literal.is_some() && slip.literal == value.origin.literal)
     })
+}
+
+/// Whether an end of the temperatures of a region is one of the slips: what follows from it then says nothing.
+pub fn is_slip_of_bound(slips: &[Slip], bound: &Bound) -> bool {
+    slips
+        .iter()
+        .any(|slip| bound.place == Some(slip.place) || (slip.literal.is_some() && slip.literal == bound.literal))
 }
 
 /// A fix that replaces a literal.

@@ -14,13 +14,13 @@ pub fn slips(subject: &Subject<'_>) -> Vec<Slip> {
     let case = subject.case;
     let mut slips = Vec::new();
     for solid in &case.solids {
-        slips.extend(solid.emissivity.as_ref().and_then(|value| per_cent(value, &solid.name.text)));
+        slips.extend(solid.emissivity.as_ref().and_then(|value| per_cent(value, "emissivity", &solid.name.text)));
     }
     for boundary in &case.boundaries {
-        slips.extend(boundary.emissivity.as_ref().and_then(|value| per_cent(value, &boundary.name.text)));
+        slips.extend(boundary.emissivity.as_ref().and_then(|value| per_cent(value, "emissivity", &boundary.name.text)));
     }
     for fluid in &case.fluids {
-        slips.extend(fluid.fraction.as_ref().and_then(|value| per_cent(value, &fluid.name.text)));
+        slips.extend(fluid.fraction.as_ref().and_then(|value| per_cent(value, "fraction", &fluid.name.text)));
     }
     for region in &case.regions {
         slips.extend(region.tilt.as_ref().and_then(|value| degrees(value, &region.name.text)));
@@ -38,12 +38,13 @@ fn is_bare(value: &Value) -> bool {
 }
 
 /// 85 for 85 %.
-fn per_cent(value: &Value, owner: &str) -> Option<Slip> {
-    if !(is_bare(value) && value.si > 1.0 && value.si <= 100.0) {
+fn per_cent(value: &Value, name: &str, owner: &str) -> Option<Slip> {
+    // Little over 1 is a share that is wrong, and no per cent that anyone would write.
+    if !(is_bare(value) && value.si >= 2.0 && value.si <= 100.0) {
         return None;
     }
     let meant = format!("{} %", rewritten(value.si));
-    let message = format!("{} of {owner} is over 1, where a share of 1 is wanted; {meant} is one", as_written(value));
+    let message = format!("the {name} of {owner}, {}, is over 1; {meant} was probably meant", as_written(value));
     Some(Slip::of(value, owner, Level::Error, meant, true, message))
 }
 
@@ -53,8 +54,10 @@ fn degrees(value: &Value, owner: &str) -> Option<Slip> {
         return None;
     }
     let meant = format!("{} deg", rewritten(value.si));
-    let message =
-        format!("a bare angle is in radians, and {} of {owner} is over π; {meant} is a tilt", as_written(value));
+    let message = format!(
+        "the tilt of {owner}, {}, is in radians as it stands, and over π; {meant} was probably meant",
+        as_written(value)
+    );
     Some(Slip::of(value, owner, Level::Error, meant, true, message))
 }
 
@@ -65,8 +68,7 @@ fn growth(value: &Value, owner: &str) -> Option<Slip> {
     }
     let meant = rewritten(1.0 + value.si);
     let message = format!(
-        "growth of {owner} is the ratio of neighbouring cells, and {} makes each cell a fraction of the one before; {meant} makes it {} greater",
-        as_written(value),
+        "the growth of {owner}, {0}, makes each cell a fraction of the one before; {meant} makes it {0} greater",
         as_written(value)
     );
     Some(Slip::of(value, owner, Level::Error, meant, false, message))

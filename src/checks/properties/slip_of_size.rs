@@ -45,27 +45,24 @@ fn of_region(region: &Region, rayleigh: f64) -> Vec<Slip> {
     let name = &region.name.text;
     if let Shape::Gap { spacing, height, .. } | Shape::Channel { spacing, height, .. } = shape
         && spacing.si >= 3.0 * height.si
-        && let Some(slip) = rescaled(spacing, "m", "mm", name, |meant| {
-            (meant < height.si).then(|| format!("wider than it is high ({})", as_written(height)))
-        })
+        && 1e-3 * spacing.si < height.si
     {
-        return vec![slip];
+        let why = format!("{name} is {} wide and only {} high", as_written(spacing), as_written(height));
+        return rescaled(spacing, "m", "mm", name, &why).into_iter().collect();
     }
     let lengths = lengths(shape);
+    let each = |from: &str, to: &str, why: &str| {
+        let slips = lengths.iter().filter_map(|length| {
+            rescaled(length, from, to, name, &format!("{name} has a length of {}, and {why}", as_written(length)))
+        });
+        slips.collect()
+    };
     let is_turbulent = region.flow.is_some_and(|flow| matches!(flow.value, Flow::Turbulent(_)));
     if lengths.iter().all(|length| length.si >= HUGE) && !is_turbulent {
-        let each = lengths.iter().filter_map(|length| {
-            rescaled(length, "m", "mm", name, |_| Some("and no flow in a space of this size is laminar".to_string()))
-        });
-        return each.collect();
+        return each("m", "mm", "no flow in a space of this size is laminar");
     }
     if lengths.iter().all(|length| length.si > 0.0 && length.si <= TINY) && rayleigh < 1.0 {
-        let each = lengths.iter().filter_map(|length| {
-            rescaled(length, "mm", "m", name, |_| {
-                Some("and no fluid moves by itself in a space of this size".to_string())
-            })
-        });
-        return each.collect();
+        return each("mm", "m", "no fluid moves by itself in a space of this size");
     }
     Vec::new()
 }
@@ -75,33 +72,20 @@ fn of_first_cell(case: &Case, mesh: &Mesh) -> Option<Slip> {
     let first = mesh.first_cell.as_ref()?;
     let region = case.region(&mesh.region.as_ref()?.text)?;
     let lengths = lengths(region.shape.as_ref()?);
-    let least = lengths.iter().map(|length| length.si).fold(f64::INFINITY, f64::min);
-    let fills_it = first.si >= 0.5 * least;
-    if !fills_it {
+    let least = lengths.into_iter().min_by(|a, b| a.si.total_cmp(&b.si))?;
+    if first.si < 0.5 * least.si || 1e-3 * first.si >= 0.05 * least.si {
         return None;
     }
-    rescaled(first, "m", "mm", &region.name.text, |meant| {
-        (meant < 0.05 * least).then(|| "and the space is hardly wider".to_string())
-    })
+    let name = &region.name.text;
+    let why =
+        format!("a first cell of {} hardly fits into {name}, which is {} wide", as_written(first), as_written(least));
+    rescaled(first, "m", "mm", name, &why)
 }
 
-/// The same number in another unit, where the value is written in `from` and `evidence`, given the value in `to` (m),
-/// speaks for it.
-fn rescaled(
-    value: &Value,
-    from: &str,
-    to: &str,
-    owner: &str,
-    evidence: impl Fn(f64) -> Option<String>,
-) -> Option<Slip> {
+/// The same number in the unit `to`, where the value is written in `from`.
+fn rescaled(value: &Value, from: &str, to: &str, owner: &str, why: &str) -> Option<Slip> {
     let number = number_written(value).filter(|_| &*value.origin.unit == from)?;
-    let si = crate::quantity::parse_unit(to).ok()?.to_si(number);
-    let why = evidence(si)?;
     let meant = format!("{} {to}", rewritten(number));
-    let message = format!(
-        "{} in {owner} is {} {to}, {why}; {meant} was probably meant",
-        as_written(value),
-        rewritten(value.si * number / si)
-    );
+    let message = format!("{why}; {meant} was probably meant");
     Some(Slip::of(value, owner, Level::Warning, meant, false, message))
 }
