@@ -1,10 +1,10 @@
 //! `mass-imbalance`: fluid that enters and cannot leave, or the other way about.
 
 use super::parts::{Role, is_open_by_shape, lets_fluid_pass, role};
-use super::sides::area_of;
 use crate::case::model::{Boundary, Case, DensityLaw, Region};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
 use crate::checks::look::{Weighed, finding_of, is_fluid, is_steady, listed, regions};
+use crate::physics::geometry::area_of;
 use crate::physics::model::RegionPhysics;
 use crate::quantity::display::format_si;
 use crate::syntax::{Finding, Level};
@@ -93,7 +93,7 @@ fn rates_differ(
         let stated = boundary.enters.as_ref()?;
         let dimension = stated.dimension;
         let rate = if dimension == SPEED {
-            density * stated.si * area_of(case, region, physics, boundary)
+            density * stated.si * area_of(case, region, boundary)
         } else if dimension == VOLUME_FLOW {
             density * stated.si
         } else if dimension == MASS_FLOW {

@@ -1,10 +1,10 @@
 //! Regions joined by faces that they share, and the heat that such a network takes in and gives off.
 
 use super::parts::{Role, is_open_by_shape, role, ties_temperature};
-use super::sides::area_of;
 use crate::case::model::{BoundaryKind, Heat, Region, Value};
 use crate::checks::check::Subject;
 use crate::checks::look::regions;
+use crate::physics::geometry::area_of;
 use crate::physics::model::RegionPhysics;
 use crate::vocabulary::statements::{HEAT_FLUX, POWER, POWER_DENSITY};
 
@@ -81,7 +81,7 @@ impl Network<'_> {
         let mut budget = HeatBudget::default();
         for (region, physics) in &self.regions {
             for boundary in subject.case.boundaries_of(region) {
-                let area = || area_of(subject.case, region, physics, boundary);
+                let area = || area_of(subject.case, region, boundary);
                 for (heat, _) in &boundary.heat {
                     match heat {
                         Heat::HeatedBy(value) => budget.add(power_of(value, area)),

@@ -1,10 +1,11 @@
 //! `repeat-unpaired`: a repeating face whose partner does not fit it.
 
 use super::parts::{Role, role};
-use super::sides::{area_of, covered_by, word};
+use super::sides::{covered_by, word};
 use crate::case::model::{Boundary, BoundaryKind, Side};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
 use crate::checks::look::region_of;
+use crate::physics::geometry::area_of;
 use crate::syntax::{Edit, Finding, Fix, Level, Place, Span};
 
 /// The check.
@@ -54,7 +55,7 @@ fn misfit(subject: &Subject<'_>, boundary: &Boundary, partner: &Boundary) -> Opt
     if one == other {
         return Some((format!("`{one}` repeats with itself."), "the boundary on the opposite side".into()));
     }
-    let (region, physics) = region_of(subject, boundary)?;
+    let (region, _) = region_of(subject, boundary)?;
     if partner.region.as_ref().is_some_and(|of| of.text != region.name.text) {
         let message = format!("`{one}` repeats with `{other}`, which belongs to another region.");
         return Some((message, format!("a boundary of `{}`", region.name.text)));
@@ -76,7 +77,7 @@ fn misfit(subject: &Subject<'_>, boundary: &Boundary, partner: &Boundary) -> Opt
             opposite(*here).map_or("sides that face each other".into(), |side| format!("the side `{}`", word(side)));
         return Some((message, remedy));
     }
-    let size = |boundary| area_of(subject.case, region, physics, boundary);
+    let size = |boundary| area_of(subject.case, region, boundary);
     let (here, there) = (size(boundary), size(partner));
     if (here - there).abs() > 0.01 * here.max(there) {
         let message = format!("`{one}` and `{other}` repeat with each other and are not of one size.");

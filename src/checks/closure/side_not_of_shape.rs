@@ -24,22 +24,19 @@ pub const CHECK: Check = Check {
 fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     let mut findings = Vec::new();
     for region in &subject.case.regions {
-        let sides = sides_of(region);
+        let sides: Vec<Side> = sides_of(subject.case, region).iter().map(|of| of.side).collect();
         if sides.is_empty() {
             continue;
         }
         let words: Vec<&str> = sides.iter().map(|side| word(*side)).collect();
         for boundary in subject.case.boundaries_of(region) {
             for stated in &boundary.sides {
-                if stated.value == Side::Remaining || sides.contains(&stated.value) {
+                let side = stated.value;
+                if side == Side::Remaining || sides.contains(&side) || is_face_of_body(region, side) {
                     continue;
                 }
-                let message = format!(
-                    "`{}` is {} and has no side `{}`.",
-                    region.name.text,
-                    shape_in_words(region),
-                    word(stated.value)
-                );
+                let message =
+                    format!("`{}` is {} and has no side `{}`.", region.name.text, shape_in_words(region), word(side));
                 findings.push(
                     Finding::new(CHECK.name, weighing.level, stated.place, message)
                         .about(&*boundary.name.text)
@@ -50,6 +47,18 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         }
     }
     findings
+}
+
+/// The face of a body in a wide fluid may be called as the shape itself has it.
+fn is_face_of_body(region: &Region, side: Side) -> bool {
+    region.is_surrounded
+        && match &region.shape {
+            Some(Shape::Cylinder { .. } | Shape::Sphere { .. }) => side == Side::Around,
+            Some(Shape::Box { .. }) => {
+                matches!(side, Side::West | Side::East | Side::South | Side::North | Side::Bottom | Side::Top)
+            }
+            _ => false,
+        }
 }
 
 fn shape_in_words(region: &Region) -> &'static str {
@@ -92,7 +101,7 @@ region ball
     sphere 0.1 m
     surrounded by a
 boundary skin of ball
-    side around  #! side-not-of-shape "body in a wide fluid"
+    side outer  #! side-not-of-shape "body in a wide fluid"
     held at 40 degC
 "##,
         );

@@ -1,10 +1,10 @@
 //! `side-twice`: two boundaries on the same part of a region's surface.
 
-use super::sides::{area_of_side, is_partial, names, sides_of, stated_area, word};
+use super::sides::{is_partial, names, sides_of, stated_area, word};
 use crate::case::model::{Boundary, Case, Region, Side};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
-use crate::checks::look::{finding_of, listed, regions};
-use crate::physics::model::RegionPhysics;
+use crate::checks::look::{finding_of, listed};
+use crate::physics::model::SideGeometry;
 use crate::quantity::display::format_si;
 use crate::syntax::{Finding, Level, Place};
 use crate::vocabulary::statements::AREA;
@@ -26,77 +26,90 @@ pub const CHECK: Check = Check {
 };
 
 fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
-    regions(subject).flat_map(|(region, physics)| of_region(subject.case, region, physics, weighing.level)).collect()
-}
-
-fn of_region(case: &Case, region: &Region, physics: &RegionPhysics, level: Level) -> Vec<Finding> {
     let mut findings = Vec::new();
-    let every = sides_of(region).iter().copied().chain([Side::Remaining]);
-    for side in every {
-        let whole: Vec<(&Boundary, Place)> = case
-            .boundaries_of(region)
-            .filter(|boundary| !is_partial(boundary) || side == Side::Remaining)
-            .flat_map(|boundary| boundary.sides.iter().map(move |stated| (boundary, stated)))
-            .filter(|(_, stated)| stated.value == side)
-            .map(|(boundary, stated)| (boundary, stated.place))
-            .collect();
-        if let [(first, first_place), (second, second_place), ..] = whole.as_slice() {
-            let message = if first.name.text == second.name.text {
-                format!("`{}` names the side `{}` twice.", first.name.text, word(side))
-            } else {
-                format!(
-                    "Both {} cover the side `{}` of `{}`.",
-                    listed(&[&first.name.text, &second.name.text]),
-                    word(side),
-                    region.name.text
-                )
-            };
-            findings.push(
-                Finding::new(CHECK.name, level, *second_place, message)
-                    .about(&*second.name.text)
-                    .remedy("give the side to one of them; a part of it is given by `patch` or `area`")
-                    .related(*first_place, "the other time"),
-            );
+    for region in &subject.case.regions {
+        let sides = sides_of(subject.case, region);
+        for side in sides.iter().map(|of| of.side).chain([Side::Remaining]) {
+            findings.extend(covered_twice(subject.case, region, side, weighing.level));
         }
-        findings.extend(too_large(case, region, physics, side, level));
+        findings.extend(sides.iter().filter_map(|side| too_large(subject.case, region, side, weighing.level)));
+        findings.extend(nothing_remains(subject.case, region, &sides));
     }
-    findings.extend(nothing_remains(case, region));
     findings
 }
 
+/// A side that one boundary covers wholly, and another as well.
+fn covered_twice(case: &Case, region: &Region, side: Side, level: Level) -> Option<Finding> {
+    let mut on_it: Vec<(&Boundary, Place)> = case
+        .boundaries_of(region)
+        .flat_map(|boundary| boundary.sides.iter().map(move |stated| (boundary, stated)))
+        .filter(|(_, stated)| stated.value == side)
+        .map(|(boundary, stated)| (boundary, stated.place))
+        .collect();
+    // The whole ones first: a part beside a whole one is too much, parts beside each other are not.
+    on_it.sort_by_key(|(boundary, _)| is_partial(boundary) && side != Side::Remaining);
+    let [(first, first_place), (second, second_place), ..] = on_it.as_slice() else { return None };
+    if is_partial(first) && side != Side::Remaining {
+        return None;
+    }
+    let (one, other) = (&first.name.text, &second.name.text);
+    let is_part = is_partial(second) && side != Side::Remaining;
+    let message = if one == other {
+        format!("`{one}` names the side `{}` twice.", word(side))
+    } else if is_part {
+        format!(
+            "`{other}` is a part of the side `{}` of `{}`, and `{one}` covers all of it.",
+            word(side),
+            region.name.text
+        )
+    } else {
+        format!("Both {} cover the side `{}` of `{}`.", listed(&[one, other]), word(side), region.name.text)
+    };
+    let remedy = if is_part {
+        format!("`side remaining` for `{one}`")
+    } else {
+        "give the side to one of them; a part of it is given by `patch` or `area`".into()
+    };
+    Some(
+        Finding::new(CHECK.name, level, *second_place, message)
+            .about(&**other)
+            .remedy(remedy)
+            .related(*first_place, "the other time"),
+    )
+}
+
 /// Patches that are larger than their side.
-fn too_large(case: &Case, region: &Region, physics: &RegionPhysics, side: Side, level: Level) -> Option<Finding> {
+fn too_large(case: &Case, region: &Region, side: &SideGeometry, level: Level) -> Option<Finding> {
     // A stated area over several sides cannot be told apart by side.
     let parts: Vec<(&Boundary, f64)> = case
         .boundaries_of(region)
-        .filter(|boundary| boundary.sides.len() == 1 && names(boundary, side))
+        .filter(|boundary| boundary.sides.len() == 1 && names(boundary, side.side))
         .filter_map(|boundary| Some((boundary, stated_area(boundary)?)))
         .collect();
     let covered: f64 = parts.iter().map(|(_, area)| area).sum();
-    let whole = area_of_side(physics, side);
     let (last, _) = parts.last()?;
     // A hundredth is left to rounding in the deck.
-    (covered > 1.01 * whole).then(|| {
+    (covered > 1.01 * side.area).then(|| {
         let names: Vec<&str> = parts.iter().map(|(boundary, _)| &*boundary.name.text).collect();
-        let verb = if names.len() == 1 { "covers" } else { "together cover" };
         let message = format!(
-            "{} {verb} {}, and the side `{}` of `{}` has only {}.",
+            "{} {} {}, and the side `{}` of `{}` has only {}.",
             listed(&names),
+            if names.len() == 1 { "covers" } else { "together cover" },
             format_si(covered, AREA),
-            word(side),
+            word(side.side),
             region.name.text,
-            format_si(whole, AREA)
+            format_si(side.area, AREA)
         );
         finding_of(CHECK.name, level, &last.name, message).remedy("a smaller `patch` or `area`, or another side")
     })
 }
 
 /// `remaining` where the other boundaries cover everything.
-fn nothing_remains(case: &Case, region: &Region) -> Option<Finding> {
+fn nothing_remains(case: &Case, region: &Region, sides: &[SideGeometry]) -> Option<Finding> {
     let boundary = case.boundaries_of(region).find(|boundary| names(boundary, Side::Remaining))?;
     let stated = boundary.sides.iter().find(|stated| stated.value == Side::Remaining)?;
-    let is_taken = |side: &Side| case.boundaries_of(region).any(|other| names(other, *side) && !is_partial(other));
-    let sides = sides_of(region);
+    let is_taken =
+        |side: &SideGeometry| case.boundaries_of(region).any(|other| names(other, side.side) && !is_partial(other));
     (!sides.is_empty() && sides.iter().all(is_taken)).then(|| {
         let message = format!(
             "Nothing remains for `{}`: other boundaries cover every side of `{}`.",
@@ -159,24 +172,30 @@ boundary rest of slab
     }
 
     #[test]
-    fn a_patch_beside_the_rest() {
+    fn patches() {
         expect_of(
             CHECK.name,
             r##"
 fluid a
-    substance    air
-    density-law  boussinesq
+    substance air
 region room
-    box          1 m by 2 m by 3 m
-    filled with  a
-
+    box 1 m by 2 m by 3 m
+    filled with a
 boundary heater of room
-    side west
+    side west  #! side-twice "`heater` is a part of the side `west`"
     patch 0.2 m by 0.3 m
     held at 40 degC
-boundary wall_behind of room
+boundary behind of room
     side west
     insulated
+boundary poster of room  #! side-twice "`poster` covers 3.5 m^2, and the side `top` of `room` has only 2 m^2"
+    side top
+    area 3.5 m^2
+    insulated
+boundary lamp of room
+    side bottom
+    patch 0.2 m by 0.3 m
+    held at 40 degC
 boundary rest of room
     side remaining
     insulated

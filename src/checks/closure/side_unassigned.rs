@@ -1,13 +1,13 @@
 //! `side-unassigned`: a part of a region's surface that no boundary covers.
 
 use super::parts::add_entry;
-use super::sides::{area_of_side, is_partial, names, sides_to_assign, stated_area, word};
-use crate::case::model::{Case, Region, Side};
+use super::sides::{is_partial, names, sides_to_assign, stated_area, word};
+use crate::case::model::{Boundary, Case, Region, Side};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
-use crate::checks::look::{finding_of, listed, regions};
-use crate::physics::model::RegionPhysics;
+use crate::checks::look::{finding_of, listed};
+use crate::physics::model::SideGeometry;
 use crate::quantity::display::format_si;
-use crate::syntax::{Finding, Level};
+use crate::syntax::{Finding, Fix, Level};
 use crate::vocabulary::statements::AREA;
 
 /// The check.
@@ -27,32 +27,25 @@ pub const CHECK: Check = Check {
 };
 
 fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
-    regions(subject).filter_map(|(region, physics)| of_region(subject.case, region, physics, weighing.level)).collect()
+    subject.case.regions.iter().filter_map(|region| of_region(subject.case, region, weighing.level)).collect()
 }
 
-fn of_region(case: &Case, region: &Region, physics: &RegionPhysics, level: Level) -> Option<Finding> {
+fn of_region(case: &Case, region: &Region, level: Level) -> Option<Finding> {
     if case.boundaries_of(region).any(|boundary| names(boundary, Side::Remaining)) {
         return None;
     }
     let name = &region.name.text;
-    let open: Vec<&str> = sides_to_assign(region)
-        .iter()
-        .filter(|side| !is_covered(case, region, physics, **side))
-        .map(|side| word(*side))
-        .collect();
-    if open.is_empty() {
-        return None;
-    }
+    let open: Vec<SideGeometry> =
+        sides_to_assign(case, region).into_iter().filter(|side| !is_covered(case, region, side)).collect();
+    let words: Vec<&str> = open.iter().map(|side| word(side.side)).collect();
     let nothing_at_all = case.boundaries_of(region).next().is_none();
-    let message = if nothing_at_all {
-        format!("`{name}` has no boundary: nothing holds on its sides {}.", listed(&open))
-    } else {
-        match open.as_slice() {
-            [side] => {
-                format!("No boundary covers the side `{side}` of `{name}`{}.", part_of(case, region, physics, side))
-            }
-            _ => format!("No boundary covers the sides {} of `{name}`.", listed(&open)),
+    let message = match open.as_slice() {
+        [] => return None,
+        _ if nothing_at_all => format!("`{name}` has no boundary: nothing holds on its sides {}.", listed(&words)),
+        [side] => {
+            format!("No boundary covers the side `{}` of `{name}`{}.", word(side.side), part_of(case, region, side))
         }
+        _ => format!("No boundary covers the sides {} of `{name}`.", listed(&words)),
     };
     let finding = finding_of(CHECK.name, level, &region.name, message);
     if region.is_surrounded {
@@ -62,25 +55,31 @@ fn of_region(case: &Case, region: &Region, physics: &RegionPhysics, level: Level
     }
     let mut finding = finding.remedy("a boundary with `side remaining`, or one for each");
     if !nothing_at_all {
-        let free_name = (1..100)
-            .map(|number| if number == 1 { format!("rest_of_{name}") } else { format!("rest_{number}_of_{name}") })
-            .find(|name| !case.boundaries.iter().any(|boundary| *boundary.name.text == **name));
-        let entry = free_name
-            .map(|free| format!("boundary {free} of {name}\n    side       remaining\n    wall\n    insulated"));
-        let fix = entry.and_then(|entry| add_entry(case, "Insulate what remains", &entry));
-        finding.fixes.extend(fix);
+        finding.fixes.extend(insulate_the_rest(case, name));
     }
     Some(finding)
 }
 
-fn is_covered(case: &Case, region: &Region, physics: &RegionPhysics, side: Side) -> bool {
-    if case.boundaries_of(region).any(|boundary| names(boundary, side) && !is_partial(boundary)) {
+fn insulate_the_rest(case: &Case, region: &str) -> Option<Fix> {
+    let free_name = (1..100)
+        .map(|number| if number == 1 { format!("rest_of_{region}") } else { format!("rest_{number}_of_{region}") })
+        .find(|name| !case.boundaries.iter().any(|boundary| *boundary.name.text == **name))?;
+    let entry = format!("boundary {free_name} of {region}\n    side       remaining\n    wall\n    insulated");
+    add_entry(case, "Insulate what remains", &entry)
+}
+
+fn is_covered(case: &Case, region: &Region, side: &SideGeometry) -> bool {
+    // The face of a body may be called by any side of its shape.
+    let is_face = region.is_surrounded && side.side == Side::Face;
+    let covers = |boundary: &Boundary| {
+        names(boundary, side.side) || is_face && boundary.sides.iter().any(|stated| stated.value != Side::Far)
+    };
+    if case.boundaries_of(region).any(|boundary| covers(boundary) && !is_partial(boundary)) {
         return true;
     }
     // Patches that make up the whole side. An unknown area is given the benefit of the doubt.
-    let parts = parts_of(case, region, side);
-    let whole = area_of_side(physics, side);
-    let falls_short = parts.iter().sum::<f64>() < 0.99 * whole;
+    let parts = parts_of(case, region, side.side);
+    let falls_short = parts.iter().sum::<f64>() < 0.99 * side.area;
     !parts.is_empty() && !falls_short
 }
 
@@ -89,14 +88,10 @@ fn parts_of(case: &Case, region: &Region, side: Side) -> Vec<f64> {
 }
 
 /// How much of the side is covered, where a patch covers some of it.
-fn part_of(case: &Case, region: &Region, physics: &RegionPhysics, open: &str) -> String {
-    let Some(side) = sides_to_assign(region).iter().copied().find(|side| word(*side) == open) else {
-        return String::new();
-    };
-    let covered: f64 = parts_of(case, region, side).iter().sum();
-    let whole = area_of_side(physics, side);
-    if covered > 0.0 && whole.is_finite() {
-        format!(" beyond {} of its {}", format_si(covered, AREA), format_si(whole, AREA))
+fn part_of(case: &Case, region: &Region, side: &SideGeometry) -> String {
+    let covered: f64 = parts_of(case, region, side.side).iter().sum();
+    if covered > 0.0 && side.area.is_finite() {
+        format!(" beyond {} of its {}", format_si(covered, AREA), format_si(side.area, AREA))
     } else {
         String::new()
     }
@@ -159,6 +154,25 @@ boundary warm of pane
 boundary cold of pane
     side east
     held at 0 degC
+region can
+    cylinder 1 m by 2 m
+    axis x
+    filled with a
+boundary mantle of can
+    side around
+    held at 20 degC
+boundary ends of can
+    side west, east
+    insulated
+region ball
+    sphere 0.1 m
+    surrounded by a
+boundary skin of ball
+    side around
+    held at 40 degC
+boundary air_around of ball
+    side far
+    held at 20 degC
 region ring
     annulus 50 mm by 120 mm by 1 m
     filled with a

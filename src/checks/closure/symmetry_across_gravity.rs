@@ -1,7 +1,7 @@
 //! `symmetry-across-gravity`: a mirror plane that gravity points through.
 
 use super::parts::{Role, role};
-use super::sides::{covered_by, word};
+use super::sides::{covered_by, sides_of, word};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
 use crate::checks::look::{finding_of, gravity_acts, is_fluid, region_of};
 use crate::syntax::{Finding, Level};
@@ -32,13 +32,15 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     let mut findings = Vec::new();
     for boundary in subject.case.boundaries.iter().filter(|boundary| role(boundary) == Role::Symmetry) {
-        let Some((region, physics)) = region_of(subject, boundary) else { continue };
-        if !is_fluid(region) {
+        let Some((region, _)) = region_of(subject, boundary) else { continue };
+        // A stated tilt turns the region against gravity, and says only how the hot plate stands.
+        if !is_fluid(region) || region.tilt.is_some() {
             continue;
         }
-        let across = covered_by(subject.case, region, boundary).into_iter().find(|side| {
-            physics.geometry.sides.iter().any(|of| of.side == *side && dot(of.normal, gravity.direction).abs() > SLIGHT)
-        });
+        let sides = sides_of(subject.case, region);
+        let across = covered_by(subject.case, region, boundary)
+            .into_iter()
+            .find(|side| sides.iter().any(|of| of.side == *side && dot(of.normal, gravity.direction).abs() > SLIGHT));
         if let Some(side) = across {
             let message = format!(
                 "`{}` is a mirror plane on the side `{}`, and gravity points through it: buoyancy has no such symmetry.",

@@ -1,0 +1,47 @@
+//! `stable-layer`: heat from above, which moves nothing.
+
+use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
+use crate::checks::look::{celsius, estimate_note, finding_of, gravity_acts, regions};
+use crate::physics::model::ArrangementKind;
+use crate::syntax::{Finding, Level};
+
+/// The check.
+pub const CHECK: Check = Check {
+    name: "stable-layer",
+    family: Family::Regime,
+    limits: &[],
+    level: Level::Information,
+    basis: Basis {
+        compares: "Looks for enclosures with the light fluid above the heavy one. Silent where the deck itself says `arrangement stable-layer`.",
+        formula: "",
+        source: "Chandrasekhar, Hydrodynamic and Hydromagnetic Stability, 1961, chapter II: a layer that is heavier below is at rest at every \
+                 temperature difference",
+        remedy: "Look whether the hot and the cold side, or the direction of gravity, are the wrong way round; else say `arrangement stable-layer`.",
+    },
+    run: Some(run),
+};
+
+fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
+    if !gravity_acts(subject.case) {
+        return Vec::new();
+    }
+    let mut findings = Vec::new();
+    for (region, physics) in regions(subject) {
+        if physics.arrangement.kind != ArrangementKind::StableLayer || region.arrangement.is_some() {
+            continue;
+        }
+        let ends =
+            physics.bracket.as_ref().filter(|bracket| bracket.span().is_finite()).map_or(String::new(), |bracket| {
+                format!(" ({} and {})", celsius(bracket.highest.value), celsius(bracket.lowest.value))
+            });
+        let message = format!(
+            "`{}` has its light fluid above its heavy fluid{ends}: it lies at rest, and heat passes by conduction alone.{}",
+            region.name.text,
+            estimate_note(physics.bracket.as_ref()),
+        );
+        findings.push(finding_of(CHECK.name, weighing.level, &region.name, message).remedy(
+            "hot and cold side, or gravity, the other way round; `arrangement stable-layer` where it is meant",
+        ));
+    }
+    findings
+}
