@@ -3,7 +3,7 @@
 use deckline::case::Resolution;
 use deckline::case::model::{Case, Name};
 use deckline::physics::model::Physics;
-use deckline::report::{Face, Layout, Paint, Report, Sheet, Unreadable, json, write};
+use deckline::report::{Face, Layout, Paint, Report, Sheet, Unreadable, json, numbers, write};
 use deckline::syntax::{FileId, Finding, Level, Margin, Place, Span, SweepPoints, parse};
 use deckline::workspace::deck::{Deck, SourceFile};
 use std::path::Path;
@@ -286,4 +286,69 @@ fn the_order_in_which_decks_and_findings_come_decides_nothing() {
     for face in [Face::Cards, Face::Lines, Face::Json, Face::Sarif] {
         assert_eq!(shown(&one, face, Layout::default()), shown(&other, face, Layout::default()), "{face:?}");
     }
+}
+
+/// The numbers of the cabinet, with physics made by hand.
+fn numbers_of_cabinet() -> numbers::Numbers {
+    use deckline::physics::model::*;
+    let mut deck = deckline::workspace::analyse_text(&CABINET.replace("include", "# include"), "2026-01-01");
+    let properties = deckline::substances::Properties {
+        density: 0.88,
+        heat_capacity: 1007.0,
+        viscosity: 1.95e-5,
+        conductivity: 0.0275,
+        expansion: 3.2e-3,
+        compressibility: 1.27e-5,
+    };
+    let given = |value: f64, set_by: &str| Bound {
+        value,
+        band: (value, value),
+        set_by: set_by.into(),
+        place: None,
+        estimate: None,
+        literal: None,
+    };
+    let estimated = Bound {
+        band: (330.15, 338.15),
+        estimate: Some("flux correlation, Churchill and Chu 1975".into()),
+        ..given(334.15, "boundary boards")
+    };
+    deck.physics.regions = vec![RegionPhysics {
+        fluid: Some(FluidState { index: 0, reference_temperature: 298.15, pressure: 79_000.0, constants: properties }),
+        geometry: Geometry { height: 1.1, length: 0.5, spacing: 0.5, volume: 0.33, sides: Vec::new() },
+        arrangement: Arrangement {
+            kind: ArrangementKind::SideHeatedCavity,
+            why: "The hot side is west, the cold one east.".into(),
+        },
+        bracket: Some(Bracket { lowest: given(281.15, "boundary skin"), highest: estimated }),
+        numbers: Numbers {
+            film_temperature: 307.65,
+            properties: Some(properties),
+            difference: 53.0,
+            rayleigh: 3.2e8,
+            prandtl: 0.714,
+            nusselt: 42.0,
+            nusselt_band: (37.0, 47.0),
+            nusselt_basis: "MacGregor and Emery 1969".into(),
+            buoyant_velocity: 1.35,
+            expansion_span: 0.17,
+            thermal_layer: 0.006,
+            ..Numbers::default()
+        },
+    }];
+    deck.findings = findings().into_iter().filter(|finding| finding.place.file == FileId(0)).collect();
+    numbers::Numbers::of(&deck)
+}
+
+#[test]
+fn numbers_of_a_region() {
+    let found = numbers_of_cabinet();
+    let mut out = Vec::new();
+    numbers::write(&found, &mut out, Layout::default()).unwrap();
+    insta::assert_snapshot!(String::from_utf8(out).unwrap());
+    let value = serde_json::to_value(&found).unwrap();
+    let schema = serde_json::to_value(numbers::schema()).unwrap();
+    assert!(jsonschema::validator_for(&schema).unwrap().is_valid(&value));
+    assert_eq!(value["regions"][0]["numbers"][1]["symbol"], "Ra");
+    assert_eq!(value["regions"][0]["numbers"][1]["value"], 3.2e8);
 }

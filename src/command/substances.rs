@@ -2,10 +2,10 @@
 
 use super::{SOUND, quantity, terminal};
 use crate::case::model::{State, Substance};
+use crate::quantity::Dimension;
 use crate::quantity::dimension_names::{PRESSURE, TEMPERATURE};
 use crate::quantity::display::format_si;
 use crate::quantity::suggest::nearest;
-use crate::quantity::Dimension;
 use crate::report::paint::harmless;
 use crate::report::{Layout, substance, wrap};
 use crate::substances::{Medium, library};
@@ -76,16 +76,19 @@ pub fn run(arguments: &Arguments) -> u8 {
         return terminal::print(SOUND, |out| substance::sheet(&medium, pressure, out, layout));
     };
     match medium.properties(temperature, pressure) {
-        Some(properties) => terminal::print(SOUND, |out| {
-            substance::state(&medium, temperature, pressure, &properties, out, layout)
-        }),
+        Some(properties) => {
+            terminal::print(SOUND, |out| substance::state(&medium, temperature, pressure, &properties, out, layout))
+        }
         None => {
             let (low, high) = medium.range();
-            terminal::fail(format_args!(
-                "the data of `{name}` hold from {} to {}",
-                format_si(low, TEMPERATURE),
-                format_si(high, TEMPERATURE)
-            ))
+            let (low, high) = (format_si(low, TEMPERATURE), format_si(high, TEMPERATURE));
+            match substance::other_phase(&medium, temperature, pressure) {
+                Some(phase) => {
+                    let (temperature, pressure) = (format_si(temperature, TEMPERATURE), format_si(pressure, PRESSURE));
+                    terminal::fail(format_args!("`{name}` has {phase} at {temperature} and {pressure}"))
+                }
+                None => terminal::fail(format_args!("the data of `{name}` hold from {low} to {high}")),
+            }
         }
     }
 }

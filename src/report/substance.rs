@@ -11,8 +11,12 @@ use crate::quantity::display::{format_number, format_si};
 use crate::substances::{Medium, Properties};
 use std::io::{self, Write};
 
-/// Steps of the table over the range of the data.
-const STEPS: u32 = 6;
+/// 0 degC, K.
+const ZERO_CELSIUS: f64 = 273.15;
+/// Rows of the table over the range of the data at most, less one.
+const MOST_ROWS: f64 = 12.0;
+/// Steps of its temperatures, K.
+const ROUND_STEPS: [f64; 8] = [1.0, 2.0, 5.0, 10.0, 20.0, 50.0, 100.0, 200.0];
 
 /// Writes what is known of a substance: where it is from, how good it is, and a table over its range.
 ///
@@ -104,7 +108,7 @@ pub fn rows(properties: &Properties) -> Vec<PropertyRow> {
 }
 
 /// What has become of the substance where it is not in the state that its data are for.
-fn other_phase(medium: &Medium<'_>, temperature: f64, pressure: f64) -> Option<&'static str> {
+pub fn other_phase(medium: &Medium<'_>, temperature: f64, pressure: f64) -> Option<&'static str> {
     // Written limits and computed temperatures may differ in the last digit.
     const SLACK: f64 = 1e-6;
     let (boiling, freezing) = (medium.boiling(pressure), medium.freezing(pressure));
@@ -131,25 +135,38 @@ fn table(medium: &Medium<'_>, pressure: f64, out: &mut dyn Write, layout: Layout
     };
     writeln!(out, "{}", layout.paint.strong(&line(HEADS.map(str::to_string))))?;
     writeln!(out, "{}", layout.paint.faint(&line(UNITS.map(str::to_string))))?;
-    let (low, high) = medium.range();
-    for step in 0..=STEPS {
-        let temperature = low + (high - low) * f64::from(step) / f64::from(STEPS);
+    for temperature in temperatures(medium, pressure) {
         let number = |value: f64| if value.is_finite() { format_number(value) } else { "-".to_string() };
-        let at = format_number(temperature - 273.15);
-        let phase = other_phase(medium, temperature, pressure);
-        let cells = match medium.properties(temperature, pressure).filter(|_| phase.is_none()) {
-            Some(found) => [
-                at,
-                number(found.density),
-                number(found.heat_capacity),
-                number(found.viscosity),
-                number(found.conductivity),
-                number(found.expansion),
-                number(found.prandtl()),
-            ],
-            None => [at, "-".into(), "-".into(), "-".into(), "-".into(), "-".into(), "-".into()],
-        };
-        writeln!(out, "{}{}", line(cells), phase.map(|phase| format!("  {phase}")).unwrap_or_default())?;
+        let Some(found) = medium.properties(temperature, pressure) else { continue };
+        let cells = [
+            number(temperature - ZERO_CELSIUS),
+            number(found.density),
+            number(found.heat_capacity),
+            number(found.viscosity),
+            number(found.conductivity),
+            number(found.expansion),
+            number(found.prandtl()),
+        ];
+        writeln!(out, "{}", line(cells))?;
     }
     Ok(())
+}
+
+/// Round temperatures, K, over the range in which the substance is in the state that its data are for.
+fn temperatures(medium: &Medium<'_>, pressure: f64) -> Vec<f64> {
+    let (mut low, mut high) = medium.range();
+    let (boiling, freezing) = (medium.boiling(pressure), medium.freezing(pressure));
+    if medium.is_gas() {
+        low = low.max(boiling.unwrap_or(low));
+    } else {
+        low = low.max(freezing.unwrap_or(low));
+        high = high.min(boiling.unwrap_or(high));
+    }
+    if !low.is_finite() || !high.is_finite() || high <= low {
+        return Vec::new();
+    }
+    let step = ROUND_STEPS.into_iter().find(|step| (high - low) / step <= MOST_ROWS).unwrap_or(high - low);
+    let first = ((low - ZERO_CELSIUS) / step).ceil() as i64;
+    let last = ((high - ZERO_CELSIUS) / step).floor() as i64;
+    (first..=last).map(|number| ZERO_CELSIUS + number as f64 * step).collect()
 }
