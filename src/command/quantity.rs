@@ -30,7 +30,8 @@ pub fn read(words: &[String], dimension: Dimension) -> Result<f64, String> {
 
 /// The number at the start of a text, and the rest.
 fn split(text: &str) -> Option<(f64, &str)> {
-    let may_be_in_number = |character: char| character.is_ascii_digit() || matches!(character, '.' | '+' | '-' | 'e' | 'E');
+    let may_be_in_number =
+        |character: char| character.is_ascii_digit() || matches!(character, '.' | '+' | '-' | 'e' | 'E');
     let longest = text.find(|character| !may_be_in_number(character)).unwrap_or(text.len());
     (1..=longest).rev().find_map(|end| {
         let number = text.get(..end)?.parse::<f64>().ok().filter(|number| number.is_finite())?;

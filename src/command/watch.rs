@@ -47,9 +47,14 @@ fn folders(assessment: &Assessment) -> BTreeSet<(PathBuf, bool)> {
         .collect()
 }
 
-fn watch(watcher: &mut RecommendedWatcher, folders: &BTreeSet<(PathBuf, bool)>, watched: &mut BTreeSet<(PathBuf, bool)>) {
+fn watch(
+    watcher: &mut RecommendedWatcher,
+    folders: &BTreeSet<(PathBuf, bool)>,
+    watched: &mut BTreeSet<(PathBuf, bool)>,
+) {
     for (folder, below) in folders {
-        let covered = watched.iter().any(|(known, all)| known == folder && (*all || !below) || *all && folder.starts_with(known));
+        let covered =
+            watched.iter().any(|(known, all)| known == folder && (*all || !below) || *all && folder.starts_with(known));
         if covered {
             continue;
         }

@@ -17,20 +17,14 @@ fn usable(inputs: &[f64], result: f64) -> Option<f64> {
 /// LeFevre, Proc. 9th Int. Congr. Appl. Mech. 4 (1956) 168-174, fitted to Ostrach, NACA Report 1111 (1953), within 0.5 %.
 pub fn similarity_gradient(prandtl: f64) -> Option<f64> {
     let root = prandtl.sqrt();
-    usable(
-        &[prandtl],
-        0.75 * root / (0.609 + 1.221 * root + 1.238 * prandtl).powf(0.25),
-    )
+    usable(&[prandtl], 0.75 * root / (0.609 + 1.221 * root + 1.238 * prandtl).powf(0.25))
 }
 
 /// Mean Nusselt number of the laminar vertical plate by the similarity solution: (4/3) (Gr/4)^(1/4) times
 /// [`similarity_gradient`], Gr = Ra/Pr on the height (Ostrach 1953).
 pub fn laminar_plate_nusselt(rayleigh: f64, prandtl: f64) -> Option<f64> {
     let gradient = similarity_gradient(prandtl)?;
-    usable(
-        &[rayleigh],
-        4.0 / 3.0 * (0.25 * rayleigh / prandtl).powf(0.25) * gradient,
-    )
+    usable(&[rayleigh], 4.0 / 3.0 * (0.25 * rayleigh / prandtl).powf(0.25) * gradient)
 }
 
 /// Scale of the thermal layer on a laminar vertical plate, H Ra^(-1/4), in m (order of magnitude, any Prandtl number over 1).
@@ -66,36 +60,24 @@ pub fn convection_layer(depth: f64, nusselt: f64) -> Option<f64> {
 /// Viscous layer that goes with a thermal layer at a Prandtl number over 1: Pr^(1/2) times as thick, in m (Patterson and
 /// Imberger, J. Fluid Mech. 100 (1980) 65-86). At lower Prandtl numbers as thick as the thermal layer.
 pub fn viscous_layer(thermal_layer: f64, prandtl: f64) -> Option<f64> {
-    usable(
-        &[thermal_layer, prandtl],
-        thermal_layer * prandtl.sqrt().max(1.0),
-    )
+    usable(&[thermal_layer, prandtl], thermal_layer * prandtl.sqrt().max(1.0))
 }
 
 /// Time for the layers on the side walls to form, h² / (a Ra^(1/2)), in s; h height in m, a thermal diffusivity in m²/s, Rayleigh
 /// number on the height (Patterson and Imberger 1980).
 pub fn boundary_layer_time(height: f64, diffusivity: f64, rayleigh: f64) -> Option<f64> {
-    usable(
-        &[height, diffusivity, rayleigh],
-        height * height / (diffusivity * rayleigh.sqrt()),
-    )
+    usable(&[height, diffusivity, rayleigh], height * height / (diffusivity * rayleigh.sqrt()))
 }
 
 /// Velocity in the layers on the side walls, a Ra^(1/2) / h, in m/s (Patterson and Imberger 1980).
 pub fn boundary_layer_velocity(height: f64, diffusivity: f64, rayleigh: f64) -> Option<f64> {
-    usable(
-        &[height, diffusivity, rayleigh],
-        diffusivity * rayleigh.sqrt() / height,
-    )
+    usable(&[height, diffusivity, rayleigh], diffusivity * rayleigh.sqrt() / height)
 }
 
 /// Time for the layers' flow to fill the cavity with stratified fluid, h l / (a Ra^(1/4)), in s; l is the width in m
 /// (Patterson and Imberger 1980).
 pub fn filling_time(height: f64, width: f64, diffusivity: f64, rayleigh: f64) -> Option<f64> {
-    usable(
-        &[height, width, diffusivity, rayleigh],
-        height * width / (diffusivity * rayleigh.powf(0.25)),
-    )
+    usable(&[height, width, diffusivity, rayleigh], height * width / (diffusivity * rayleigh.powf(0.25)))
 }
 
 /// Time for heat to cross a length by conduction, l²/a, in s.
@@ -121,12 +103,7 @@ pub fn batchelor_length(depth: f64, rayleigh: f64, prandtl: f64, nusselt: f64) -
 ///
 /// Groetzbach, Spatial resolution requirements for direct numerical simulation of the Rayleigh-Benard convection, J. Comput. Phys.
 /// 49 (1983) 241-264 (recalled).
-pub fn direct_simulation_spacing(
-    depth: f64,
-    rayleigh: f64,
-    prandtl: f64,
-    nusselt: f64,
-) -> Option<f64> {
+pub fn direct_simulation_spacing(depth: f64, rayleigh: f64, prandtl: f64, nusselt: f64) -> Option<f64> {
     let smallest = if prandtl <= 1.0 {
         kolmogorov_length(depth, rayleigh, prandtl, nusselt)?
     } else {
@@ -167,15 +144,9 @@ pub fn layer_nodes(nusselt: f64, prandtl: f64, constant: f64) -> Option<LayerNod
             prandtl.powf(-0.25) * VELOCITY_GRADIENT.sqrt() * PI.powf(0.25),
         )
     } else if prandtl <= 1.0 {
-        (
-            prandtl.powf(-0.5355 + 0.033 * logarithm),
-            prandtl.powf(-0.1785 + 0.011 * logarithm),
-        )
+        (prandtl.powf(-0.5355 + 0.033 * logarithm), prandtl.powf(-0.1785 + 0.011 * logarithm))
     } else if prandtl <= 3.0 {
-        (
-            prandtl.powf(-0.0355 + 0.033 * logarithm),
-            prandtl.powf(0.3215 + 0.011 * logarithm),
-        )
+        (prandtl.powf(-0.0355 + 0.033 * logarithm), prandtl.powf(0.3215 + 0.011 * logarithm))
     } else {
         (LAYER_RATIO.powf(1.5), prandtl.cbrt() * LAYER_RATIO.sqrt())
     };
@@ -219,14 +190,8 @@ mod tests {
         for (prandtl, tolerance) in [(3e-4, 0.002), (1.0, 1e-9), (3.0, 0.007)] {
             let below = layer_nodes(30.0, prandtl * (1.0 - 1e-12), KINETIC_LAYER_CONSTANT).unwrap();
             let above = layer_nodes(30.0, prandtl * (1.0 + 1e-12), KINETIC_LAYER_CONSTANT).unwrap();
-            assert!(
-                (below.thermal / above.thermal - 1.0).abs() < tolerance,
-                "{prandtl} {below:?} {above:?}"
-            );
-            assert!(
-                (below.kinetic / above.kinetic - 1.0).abs() < tolerance,
-                "{prandtl} {below:?} {above:?}"
-            );
+            assert!((below.thermal / above.thermal - 1.0).abs() < tolerance, "{prandtl} {below:?} {above:?}");
+            assert!((below.kinetic / above.kinetic - 1.0).abs() < tolerance, "{prandtl} {below:?} {above:?}");
         }
     }
 
@@ -238,31 +203,20 @@ mod tests {
             let nodes = layer_nodes(nusselt, 0.7, KINETIC_LAYER_CONSTANT).unwrap();
             let thermal = 0.35 * rayleigh.powf(0.15);
             let kinetic = 0.31 * rayleigh.powf(0.15);
-            assert!(
-                (nodes.thermal / thermal - 1.0).abs() < 0.2,
-                "{nodes:?} {thermal}"
-            );
-            assert!(
-                (nodes.kinetic / kinetic - 1.0).abs() < 0.2,
-                "{nodes:?} {kinetic}"
-            );
+            assert!((nodes.thermal / thermal - 1.0).abs() < 0.2, "{nodes:?} {thermal}");
+            assert!((nodes.kinetic / kinetic - 1.0).abs() < 0.2, "{nodes:?} {kinetic}");
         }
     }
 
     #[test]
     fn spacing_and_exact_dissipation() {
         // η = (ν³/ε)^(1/4) with ε = ν³ (Nu - 1) Ra Pr^(-2) / H⁴.
-        let (depth, rayleigh, prandtl, nusselt, viscosity) =
-            (0.5_f64, 1e8_f64, 0.7_f64, 32.0, 1.5e-5_f64);
-        let dissipation =
-            viscosity.powi(3) * (nusselt - 1.0) * rayleigh / (prandtl.powi(2) * depth.powi(4));
+        let (depth, rayleigh, prandtl, nusselt, viscosity) = (0.5_f64, 1e8_f64, 0.7_f64, 32.0, 1.5e-5_f64);
+        let dissipation = viscosity.powi(3) * (nusselt - 1.0) * rayleigh / (prandtl.powi(2) * depth.powi(4));
         let expected = (viscosity.powi(3) / dissipation).powf(0.25);
         let got = kolmogorov_length(depth, rayleigh, prandtl, nusselt).unwrap();
         assert!((got / expected - 1.0).abs() < 1e-12);
-        assert_eq!(
-            direct_simulation_spacing(depth, rayleigh, prandtl, nusselt),
-            Some(PI * got)
-        );
+        assert_eq!(direct_simulation_spacing(depth, rayleigh, prandtl, nusselt), Some(PI * got));
         let water = direct_simulation_spacing(depth, rayleigh, 7.0, nusselt).unwrap();
         let expected = PI * depth * (1.0 / ((nusselt - 1.0) * rayleigh)).powf(0.25);
         assert!((water / expected - 1.0).abs() < 1e-12);
@@ -274,9 +228,7 @@ mod tests {
         let (height, width, diffusivity, rayleigh) = (0.3, 0.1, 1.43e-7, 1e8_f64);
         let layer_time = boundary_layer_time(height, diffusivity, rayleigh).unwrap();
         let filling = filling_time(height, width, diffusivity, rayleigh).unwrap();
-        assert!(
-            (filling / (layer_time * rayleigh.powf(0.25) * width / height) - 1.0).abs() < 1e-12
-        );
+        assert!((filling / (layer_time * rayleigh.powf(0.25) * width / height) - 1.0).abs() < 1e-12);
         let thickness = laminar_layer_scale(height, rayleigh).unwrap();
         assert!((diffusion_time(thickness, diffusivity).unwrap() / layer_time - 1.0).abs() < 1e-12);
         let top = laminar_layer_at_top(height, rayleigh, 7.0).unwrap();

@@ -31,7 +31,9 @@ pub fn role(boundary: &Boundary) -> Role {
     if !boundary.sides.is_empty() && boundary.sides.iter().all(|side| side.value == Side::Far) {
         return Role::Far;
     }
-    match boundary.kinds.first().map(|(kind, _)| kind) {
+    // A face that meets another region is that first, though it may be a wall as well.
+    let meets = boundary.kinds.iter().find(|(kind, _)| matches!(kind, BoundaryKind::Meets(_)));
+    match meets.or(boundary.kinds.first()).map(|(kind, _)| kind) {
         Some(BoundaryKind::Wall { .. }) => Role::Wall,
         Some(BoundaryKind::Inlet) => Role::Inlet,
         Some(BoundaryKind::Outlet) => Role::Outlet,

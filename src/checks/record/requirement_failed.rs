@@ -118,10 +118,9 @@ pub fn numbers_in(requirement: &Requirement) -> Vec<(&'static str, Box<str>)> {
     numbers
 }
 
-/// A side as people write it. A lone `temperature_span`, or what is compared with it, is a difference.
+/// A side as people write it.
 fn in_words(requirement: &Requirement, si: f64) -> String {
-    let is_difference = numbers_in(requirement).iter().any(|(number, _)| *number == "temperature_span");
-    if requirement.dimension == TEMPERATURE && is_difference {
+    if requirement.dimension == TEMPERATURE && requirement.is_difference {
         format_difference(si)
     } else {
         format_si(si, requirement.dimension)

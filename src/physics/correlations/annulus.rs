@@ -5,6 +5,7 @@ use super::{Correlation, Estimate, estimate};
 const RAITHBY_HOLLANDS: &str = "Raithby and Hollands, A general method of obtaining approximate solutions to laminar and turbulent free \
      convection problems, Advances in Heat Transfer 11 (1975) 265-315";
 
+/// Annulus between horizontal cylinders.
 pub const CYLINDERS: Correlation = Correlation {
     name: "annulus between horizontal cylinders",
     source: RAITHBY_HOLLANDS,
@@ -13,6 +14,7 @@ pub const CYLINDERS: Correlation = Correlation {
     scatter_basis: "common practice",
 };
 
+/// Gap between concentric spheres.
 pub const SPHERES: Correlation = Correlation {
     name: "gap between concentric spheres",
     source: RAITHBY_HOLLANDS,
@@ -52,21 +54,12 @@ fn diameter_ratio(inner_diameter: f64, outer_diameter: f64) -> Option<f64> {
 
 /// Concentric horizontal cylinders, Rayleigh number on the gap (Do - Di)/2: k_eff/k =
 /// 0.386 (Pr / (0.861 + Pr))^(1/4) (F Ra)^(1/4), at least 1.
-pub fn cylinders(
-    rayleigh: f64,
-    prandtl: f64,
-    inner_diameter: f64,
-    outer_diameter: f64,
-) -> Estimate {
+pub fn cylinders(rayleigh: f64, prandtl: f64, inner_diameter: f64, outer_diameter: f64) -> Estimate {
     let reduced = cylinder_factor(inner_diameter, outer_diameter) * rayleigh;
     let inside = reduced > 0.0 && reduced <= 1e7 && (0.7..=6000.0).contains(&prandtl);
-    estimate(
-        &CYLINDERS,
-        &[rayleigh, prandtl, inner_diameter, outer_diameter],
-        1.0,
-        inside,
-        || gap_value(0.386, reduced, prandtl),
-    )
+    estimate(&CYLINDERS, &[rayleigh, prandtl, inner_diameter, outer_diameter], 1.0, inside, || {
+        gap_value(0.386, reduced, prandtl)
+    })
 }
 
 /// Concentric spheres, Rayleigh number on the gap (Do - Di)/2: k_eff/k = 0.74 (Pr / (0.861 + Pr))^(1/4)
@@ -74,13 +67,9 @@ pub fn cylinders(
 pub fn spheres(rayleigh: f64, prandtl: f64, inner_diameter: f64, outer_diameter: f64) -> Estimate {
     let reduced = sphere_factor(inner_diameter, outer_diameter) * rayleigh;
     let inside = reduced > 0.0 && reduced <= 1e4 && (0.7..=4000.0).contains(&prandtl);
-    estimate(
-        &SPHERES,
-        &[rayleigh, prandtl, inner_diameter, outer_diameter],
-        1.0,
-        inside,
-        || gap_value(0.74, reduced, prandtl),
-    )
+    estimate(&SPHERES, &[rayleigh, prandtl, inner_diameter, outer_diameter], 1.0, inside, || {
+        gap_value(0.74, reduced, prandtl)
+    })
 }
 
 fn gap_value(coefficient: f64, reduced_rayleigh: f64, prandtl: f64) -> f64 {
@@ -99,8 +88,7 @@ mod tests {
         for (inner, outer) in [(0.1, 0.12), (0.05, 0.2), (1.0, 2.6)] {
             let (ri, ro) = (0.5_f64 * inner, 0.5_f64 * outer);
             let gap = ro - ri;
-            let length = 2.0 * (ro / ri).ln().powf(4.0 / 3.0)
-                / (ri.powf(-0.6) + ro.powf(-0.6)).powf(5.0 / 3.0);
+            let length = 2.0 * (ro / ri).ln().powf(4.0 / 3.0) / (ri.powf(-0.6) + ro.powf(-0.6)).powf(5.0 / 3.0);
             let expected = (length / gap).powi(3);
             assert!((cylinder_factor(inner, outer) / expected - 1.0).abs() < 1e-12);
             let length = (1.0 / ri - 1.0 / ro).powf(4.0 / 3.0)
@@ -116,10 +104,7 @@ mod tests {
         // Ra 1e4 and 3.024 at 5e4 (numerical solution; recalled).
         for (rayleigh, published) in [(1e4, 2.010), (5e4, 3.024)] {
             let got = cylinders(rayleigh, 0.7, 1.0, 2.6);
-            assert!(
-                got.low < published && published < got.high,
-                "{rayleigh:e} {got:?}"
-            );
+            assert!(got.low < published && published < got.high, "{rayleigh:e} {got:?}");
             assert!(got.inside_range);
         }
     }
@@ -135,14 +120,7 @@ mod tests {
 
     #[test]
     fn no_gap_is_conduction() {
-        for (inner, outer) in [
-            (1.0, 1.0),
-            (2.0, 1.0),
-            (0.0, 1.0),
-            (-1.0, 1.0),
-            (f64::NAN, 1.0),
-            (1.0, f64::INFINITY),
-        ] {
+        for (inner, outer) in [(1.0, 1.0), (2.0, 1.0), (0.0, 1.0), (-1.0, 1.0), (f64::NAN, 1.0), (1.0, f64::INFINITY)] {
             let got = cylinders(1e6, 0.7, inner, outer);
             assert_eq!((got.value, got.inside_range), (1.0, false));
             let got = spheres(1e6, 0.7, inner, outer);

@@ -7,6 +7,7 @@ const CHURCHILL_CHU_CYLINDER: &str = "Churchill and Chu, Correlating equations f
 const CHURCHILL_SPHERE: &str = "Churchill, Free convection around immersed bodies, in Schluender (ed.), Heat Exchanger Design Handbook, \
      1983, section 2.5.7";
 
+/// Horizontal cylinder, isothermal.
 pub const HORIZONTAL_CYLINDER: Correlation = Correlation {
     name: "horizontal cylinder, isothermal",
     source: CHURCHILL_CHU_CYLINDER,
@@ -16,6 +17,7 @@ pub const HORIZONTAL_CYLINDER: Correlation = Correlation {
      common practice is 20 %",
 };
 
+/// Horizontal cylinder, isothermal, laminar.
 pub const HORIZONTAL_CYLINDER_LAMINAR: Correlation = Correlation {
     name: "horizontal cylinder, isothermal, laminar",
     source: CHURCHILL_CHU_CYLINDER,
@@ -25,6 +27,7 @@ pub const HORIZONTAL_CYLINDER_LAMINAR: Correlation = Correlation {
      common practice is 20 %",
 };
 
+/// Sphere, isothermal.
 pub const SPHERE: Correlation = Correlation {
     name: "sphere, isothermal",
     source: CHURCHILL_SPHERE,
@@ -33,6 +36,7 @@ pub const SPHERE: Correlation = Correlation {
     scatter_basis: "common practice; from Ra 1e8 take the fuller form, which lies 31 % higher at Ra 1e9",
 };
 
+/// Sphere, isothermal, laminar to turbulent.
 pub const SPHERE_TO_TURBULENT: Correlation = Correlation {
     name: "sphere, isothermal, laminar to turbulent",
     source: CHURCHILL_SPHERE,
@@ -44,31 +48,19 @@ pub const SPHERE_TO_TURBULENT: Correlation = Correlation {
 /// Isothermal horizontal cylinder, laminar or turbulent.
 pub fn horizontal_cylinder(rayleigh: f64, prandtl: f64) -> Estimate {
     let inside = (1e-5..=1e12).contains(&rayleigh) && prandtl > 0.0;
-    estimate(
-        &HORIZONTAL_CYLINDER,
-        &[rayleigh, prandtl],
-        0.36,
-        inside,
-        || {
-            let prandtl_term = (1.0 + (0.559 / prandtl).powf(9.0 / 16.0)).powf(8.0 / 27.0);
-            (0.60 + 0.387 * rayleigh.powf(1.0 / 6.0) / prandtl_term).powi(2)
-        },
-    )
+    estimate(&HORIZONTAL_CYLINDER, &[rayleigh, prandtl], 0.36, inside, || {
+        let prandtl_term = (1.0 + (0.559 / prandtl).powf(9.0 / 16.0)).powf(8.0 / 27.0);
+        (0.60 + 0.387 * rayleigh.powf(1.0 / 6.0) / prandtl_term).powi(2)
+    })
 }
 
 /// Isothermal horizontal cylinder, laminar.
 pub fn horizontal_cylinder_laminar(rayleigh: f64, prandtl: f64) -> Estimate {
     let inside = (1e-6..=1e9).contains(&rayleigh) && prandtl > 0.0;
-    estimate(
-        &HORIZONTAL_CYLINDER_LAMINAR,
-        &[rayleigh, prandtl],
-        0.36,
-        inside,
-        || {
-            let prandtl_term = (1.0 + (0.559 / prandtl).powf(9.0 / 16.0)).powf(4.0 / 9.0);
-            0.36 + 0.518 * rayleigh.powf(0.25) / prandtl_term
-        },
-    )
+    estimate(&HORIZONTAL_CYLINDER_LAMINAR, &[rayleigh, prandtl], 0.36, inside, || {
+        let prandtl_term = (1.0 + (0.559 / prandtl).powf(9.0 / 16.0)).powf(4.0 / 9.0);
+        0.36 + 0.518 * rayleigh.powf(0.25) / prandtl_term
+    })
 }
 
 /// Isothermal sphere, laminar; from Ra 1e8 [`sphere_to_turbulent`] is the better one.
@@ -82,17 +74,11 @@ pub fn sphere(rayleigh: f64, prandtl: f64) -> Estimate {
 /// Isothermal sphere, with the handbook's factor for turbulence.
 pub fn sphere_to_turbulent(rayleigh: f64, prandtl: f64) -> Estimate {
     let inside = (0.0..=1e13).contains(&rayleigh) && prandtl > 0.0;
-    estimate(
-        &SPHERE_TO_TURBULENT,
-        &[rayleigh, prandtl],
-        2.0,
-        inside,
-        || {
-            let prandtl_term = sphere_prandtl_term(prandtl);
-            let turbulent = (1.0 + 7.44e-8 * rayleigh / prandtl_term.powi(4)).powf(1.0 / 12.0);
-            2.0 + 0.589 * rayleigh.powf(0.25) / prandtl_term * turbulent
-        },
-    )
+    estimate(&SPHERE_TO_TURBULENT, &[rayleigh, prandtl], 2.0, inside, || {
+        let prandtl_term = sphere_prandtl_term(prandtl);
+        let turbulent = (1.0 + 7.44e-8 * rayleigh / prandtl_term.powi(4)).powf(1.0 / 12.0);
+        2.0 + 0.589 * rayleigh.powf(0.25) / prandtl_term * turbulent
+    })
 }
 
 /// [1 + (0.469/Pr)^(9/16)]^(4/9).
@@ -118,19 +104,13 @@ mod tests {
             for prandtl in [0.71, 7.0] {
                 let laminar = horizontal_cylinder_laminar(rayleigh, prandtl).value;
                 let full = horizontal_cylinder(rayleigh, prandtl).value;
-                assert!(
-                    (laminar / full - 1.0).abs() < 0.08,
-                    "{rayleigh:e} {prandtl} {laminar} {full}"
-                );
+                assert!((laminar / full - 1.0).abs() < 0.08, "{rayleigh:e} {prandtl} {laminar} {full}");
             }
         }
         for rayleigh in [1e3, 1e6] {
             let plain = sphere(rayleigh, 0.71).value;
             let full = sphere_to_turbulent(rayleigh, 0.71).value;
-            assert!(
-                (plain / full - 1.0).abs() < 0.003,
-                "{rayleigh:e} {plain} {full}"
-            );
+            assert!((plain / full - 1.0).abs() < 0.003, "{rayleigh:e} {plain} {full}");
         }
     }
 }

@@ -2,6 +2,7 @@
 
 use super::{Correlation, Estimate, estimate, vertical_plate};
 
+/// Inclined plate, laminar.
 pub const INCLINED: Correlation = Correlation {
     name: "inclined plate, laminar",
     source: "Rich, Trans. ASME 75 (1953) 489-499, and Vliet, J. Heat Transfer 91 (1969) 511-516: Churchill and Chu 1975 \
@@ -19,17 +20,11 @@ pub const INCLINED: Correlation = Correlation {
 pub fn inclined(rayleigh: f64, prandtl: f64, tilt: f64) -> Estimate {
     let tilt = tilt.abs();
     let along = tilt.cos().max(0.0);
-    let driving = if tilt < core::f64::consts::FRAC_PI_2 {
-        rayleigh * along
-    } else {
-        0.0
-    };
+    let driving = if tilt < core::f64::consts::FRAC_PI_2 { rayleigh * along } else { 0.0 };
     let laminar = vertical_plate::isothermal_laminar(driving, prandtl);
     // A rounding's width, so that 60 degrees turned into radians is within the limit of 60.
     let inside = laminar.inside_range && tilt <= 60_f64.to_radians() + 1e-12;
-    estimate(&INCLINED, &[rayleigh, prandtl, tilt], 0.68, inside, || {
-        laminar.value
-    })
+    estimate(&INCLINED, &[rayleigh, prandtl, tilt], 0.68, inside, || laminar.value)
 }
 
 #[cfg(test)]

@@ -114,16 +114,8 @@ pub(crate) fn estimate(
     inside_range: bool,
     formula: impl FnOnce() -> f64,
 ) -> Estimate {
-    let at_rest = Estimate {
-        value: without_motion,
-        low: without_motion,
-        high: without_motion,
-        inside_range: false,
-    };
-    if !inputs
-        .iter()
-        .all(|input| input.is_finite() && *input >= 0.0)
-    {
+    let at_rest = Estimate { value: without_motion, low: without_motion, high: without_motion, inside_range: false };
+    if !inputs.iter().all(|input| input.is_finite() && *input >= 0.0) {
         return at_rest;
     }
     let raw = formula();
@@ -161,11 +153,7 @@ mod tests {
             for text in [row.name, row.source, row.range, row.scatter_basis] {
                 assert!(!text.trim().is_empty());
             }
-            assert!(
-                row.source.chars().any(|c| c.is_ascii_digit()),
-                "no year: {}",
-                row.name
-            );
+            assert!(row.source.chars().any(|c| c.is_ascii_digit()), "no year: {}", row.name);
             assert!(ALL[index + 1..].iter().all(|other| other.name != row.name));
         }
     }
@@ -175,10 +163,7 @@ mod tests {
         let row = &vertical_plate::ISOTHERMAL;
         for input in [f64::NAN, f64::INFINITY, f64::NEG_INFINITY, -1.0] {
             let got = estimate(row, &[input], 1.0, true, || 7.0);
-            assert_eq!(
-                (got.value, got.low, got.high, got.inside_range),
-                (1.0, 1.0, 1.0, false)
-            );
+            assert_eq!((got.value, got.low, got.high, got.inside_range), (1.0, 1.0, 1.0, false));
         }
         let got = estimate(row, &[1.0], 1.0, true, || f64::NAN);
         assert_eq!((got.value, got.inside_range), (1.0, false));

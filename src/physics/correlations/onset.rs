@@ -15,10 +15,10 @@ pub struct Onset {
     pub source: &'static str,
 }
 
-const CHANDRASEKHAR: &str =
-    "Chandrasekhar, Hydrodynamic and Hydromagnetic Stability, 1961, chapter II";
+const CHANDRASEKHAR: &str = "Chandrasekhar, Hydrodynamic and Hydromagnetic Stability, 1961, chapter II";
 
 /// Motion in a layer heated from below, both faces rigid (critical wave number 3.117).
+/// Motion in a layer heated from below, both faces rigid.
 pub const LAYER_RIGID_RIGID: Onset = Onset {
     name: "motion in a layer heated from below, both faces rigid",
     rayleigh: 1707.762,
@@ -28,6 +28,7 @@ pub const LAYER_RIGID_RIGID: Onset = Onset {
 };
 
 /// Motion in a layer heated from below, one face rigid, one free (critical wave number 2.682).
+/// Motion in a layer heated from below, one face rigid, one free.
 pub const LAYER_RIGID_FREE: Onset = Onset {
     name: "motion in a layer heated from below, one face rigid, one free",
     rayleigh: 1100.65,
@@ -37,6 +38,7 @@ pub const LAYER_RIGID_FREE: Onset = Onset {
 };
 
 /// Motion in a layer heated from below, both faces free: 27 π⁴/4 (critical wave number π/√2).
+/// Motion in a layer heated from below, both faces free.
 pub const LAYER_FREE_FREE: Onset = Onset {
     name: "motion in a layer heated from below, both faces free",
     rayleigh: 657.511,
@@ -46,6 +48,7 @@ pub const LAYER_FREE_FREE: Onset = Onset {
 };
 
 /// Turbulence in a layer heated from below. Cells break down gradually, earlier at low Prandtl numbers.
+/// Turbulence in a layer heated from below.
 pub const LAYER_TURBULENT: Onset = Onset {
     name: "turbulence in a layer heated from below",
     rayleigh: 3e5,
@@ -55,6 +58,7 @@ pub const LAYER_TURBULENT: Onset = Onset {
 };
 
 /// Unsteadiness of the square side-heated cavity filled with air, insulated top and bottom (plane case).
+/// Unsteadiness in a square side-heated cavity of air, insulated top and bottom.
 pub const SQUARE_CAVITY_UNSTEADY: Onset = Onset {
     name: "unsteadiness in a square side-heated cavity of air, insulated top and bottom",
     rayleigh: 1.82e8,
@@ -64,6 +68,7 @@ pub const SQUARE_CAVITY_UNSTEADY: Onset = Onset {
      81-107",
 };
 
+/// Turbulence on a vertical plate.
 /// Turbulence on a vertical plate.
 pub const VERTICAL_PLATE_TURBULENT: Onset = Onset {
     name: "turbulence on a vertical plate",
@@ -75,6 +80,7 @@ pub const VERTICAL_PLATE_TURBULENT: Onset = Onset {
 };
 
 /// Turbulence over a horizontal plate, hot face up.
+/// Turbulence over a horizontal plate, hot face up.
 pub const HORIZONTAL_PLATE_TURBULENT: Onset = Onset {
     name: "turbulence over a horizontal plate, hot face up",
     rayleigh: 8e6,
@@ -83,6 +89,7 @@ pub const HORIZONTAL_PLATE_TURBULENT: Onset = Onset {
     source: "Lloyd and Moran, J. Heat Transfer 96 (1974) 443-447 (recalled); handbooks round it to 1e7",
 };
 
+/// Turbulence on a horizontal cylinder.
 /// Turbulence on a horizontal cylinder.
 pub const HORIZONTAL_CYLINDER_TURBULENT: Onset = Onset {
     name: "turbulence on a horizontal cylinder",
@@ -116,9 +123,6 @@ mod tests {
 
     #[test]
     fn rows_are_sound() {
-        assert!(
-            ALL.iter()
-                .all(|row| row.rayleigh > 0.0 && (0.0..1.0).contains(&row.width))
-        );
+        assert!(ALL.iter().all(|row| row.rayleigh > 0.0 && (0.0..1.0).contains(&row.width)));
     }
 }

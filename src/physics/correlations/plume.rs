@@ -8,6 +8,7 @@ use super::{Correlation, Estimate};
 const SOURCE: &str = "Morton, Taylor and Turner, Turbulent gravitational convection from maintained and instantaneous sources, \
      Proc. R. Soc. A 234 (1956) 1-23";
 
+/// Plume over a point source.
 pub const POINT: Correlation = Correlation {
     name: "plume over a point source",
     source: SOURCE,
@@ -17,6 +18,7 @@ pub const POINT: Correlation = Correlation {
      literature (both recalled)",
 };
 
+/// Plume over a line source.
 pub const LINE: Correlation = Correlation {
     name: "plume over a line source",
     source: "Lee and Emmons, A study of natural convection above a line fire, J. Fluid Mech. 11 (1961) 353-368, after Morton, Taylor and \
@@ -44,32 +46,16 @@ pub struct Plume {
 ///
 /// Gravity in m/s², expansion in 1/K, density in kg/m³, heat capacity in J/(kg K). 0 where an input is negative, zero in the
 /// denominator or not finite.
-pub fn buoyancy_flux(
-    gravity: f64,
-    thermal_expansion: f64,
-    power: f64,
-    density: f64,
-    heat_capacity: f64,
-) -> f64 {
+pub fn buoyancy_flux(gravity: f64, thermal_expansion: f64, power: f64, density: f64, heat_capacity: f64) -> f64 {
     let flux = gravity * thermal_expansion * power / (density * heat_capacity);
-    let usable = [gravity, thermal_expansion, power, density, heat_capacity]
-        .iter()
-        .all(|x| x.is_finite() && *x >= 0.0);
-    if usable && flux.is_finite() {
-        flux
-    } else {
-        0.0
-    }
+    let usable = [gravity, thermal_expansion, power, density, heat_capacity].iter().all(|x| x.is_finite() && *x >= 0.0);
+    if usable && flux.is_finite() { flux } else { 0.0 }
 }
 
 /// Average temperature excess in K from a reduced gravity: g' / (g α); 0 where that is no number.
 pub fn temperature_excess(reduced_gravity: f64, gravity: f64, thermal_expansion: f64) -> f64 {
     let excess = reduced_gravity / (gravity * thermal_expansion);
-    if excess.is_finite() && excess >= 0.0 {
-        excess
-    } else {
-        0.0
-    }
+    if excess.is_finite() && excess >= 0.0 { excess } else { 0.0 }
 }
 
 /// Point source of buoyancy flux B (m⁴/s³) at height z (m):
@@ -78,8 +64,7 @@ pub fn temperature_excess(reduced_gravity: f64, gravity: f64, thermal_expansion:
 /// Both 0 without a source, at no height, or where an input is negative or not finite.
 pub fn point(buoyancy_flux: f64, height: f64) -> Plume {
     plume(buoyancy_flux, height, POINT_ENTRAINMENT, |entrainment| {
-        let constant =
-            1.2 * entrainment * (0.9 * entrainment).cbrt() * core::f64::consts::PI.powf(2.0 / 3.0);
+        let constant = 1.2 * entrainment * (0.9 * entrainment).cbrt() * core::f64::consts::PI.powf(2.0 / 3.0);
         constant * buoyancy_flux.cbrt() * height.powf(5.0 / 3.0)
     })
 }
@@ -93,47 +78,20 @@ pub fn line(buoyancy_flux: f64, height: f64) -> Plume {
     })
 }
 
-fn plume(
-    buoyancy_flux: f64,
-    height: f64,
-    entrainment: [f64; 3],
-    flow: impl Fn(f64) -> f64,
-) -> Plume {
-    let nothing = Estimate {
-        value: 0.0,
-        low: 0.0,
-        high: 0.0,
-        inside_range: false,
-    };
+fn plume(buoyancy_flux: f64, height: f64, entrainment: [f64; 3], flow: impl Fn(f64) -> f64) -> Plume {
+    let nothing = Estimate { value: 0.0, low: 0.0, high: 0.0, inside_range: false };
     let [usual, least, largest] = entrainment;
     let flows = [flow(usual), flow(least), flow(largest)];
     let dilutions = flows.map(|volume_flow| buoyancy_flux / volume_flow);
     let usable = |x: &f64| x.is_finite() && *x > 0.0;
-    if !(buoyancy_flux > 0.0
-        && height > 0.0
-        && flows.iter().all(usable)
-        && dilutions.iter().all(usable))
-    {
-        return Plume {
-            volume_flow: nothing,
-            reduced_gravity: nothing,
-        };
+    if !(buoyancy_flux > 0.0 && height > 0.0 && flows.iter().all(usable) && dilutions.iter().all(usable)) {
+        return Plume { volume_flow: nothing, reduced_gravity: nothing };
     }
     let [value, low, high] = flows;
     let [gravity_value, gravity_high, gravity_low] = dilutions;
     Plume {
-        volume_flow: Estimate {
-            value,
-            low,
-            high,
-            inside_range: true,
-        },
-        reduced_gravity: Estimate {
-            value: gravity_value,
-            low: gravity_low,
-            high: gravity_high,
-            inside_range: true,
-        },
+        volume_flow: Estimate { value, low, high, inside_range: true },
+        reduced_gravity: Estimate { value: gravity_value, low: gravity_low, high: gravity_high, inside_range: true },
     }
 }
 
@@ -148,16 +106,10 @@ mod tests {
         let flux = buoyancy_flux(9.81, 1.0 / 293.0, 100.0, 1.2, 1005.0);
         let got = point(flux, 2.0).volume_flow;
         let handbook = 0.005 * 100_f64.cbrt() * 2_f64.powf(5.0 / 3.0);
-        assert!(
-            got.low < handbook && handbook < got.high,
-            "{got:?} {handbook}"
-        );
+        assert!(got.low < handbook && handbook < got.high, "{got:?} {handbook}");
         let got = line(flux, 2.0).volume_flow;
         let handbook = 0.013 * 100_f64.cbrt() * 2.0;
-        assert!(
-            got.low < handbook && handbook < got.high,
-            "{got:?} {handbook}"
-        );
+        assert!(got.low < handbook && handbook < got.high, "{got:?} {handbook}");
     }
 
     #[test]
@@ -165,14 +117,9 @@ mod tests {
         let got = point(0.01, 3.0);
         assert!((got.volume_flow.value * got.reduced_gravity.value / 0.01 - 1.0).abs() < 1e-12);
         assert!(got.reduced_gravity.low < got.reduced_gravity.high);
-        for (flux, height) in [
-            (0.0, 1.0),
-            (1.0, 0.0),
-            (-1.0, 1.0),
-            (f64::NAN, 1.0),
-            (1.0, f64::INFINITY),
-            (1e-300, 1e-300),
-        ] {
+        for (flux, height) in
+            [(0.0, 1.0), (1.0, 0.0), (-1.0, 1.0), (f64::NAN, 1.0), (1.0, f64::INFINITY), (1e-300, 1e-300)]
+        {
             for got in [point(flux, height), line(flux, height)] {
                 assert!(got.volume_flow.value.is_finite() && got.reduced_gravity.value.is_finite());
             }

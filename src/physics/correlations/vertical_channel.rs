@@ -6,11 +6,13 @@ use super::{Correlation, Estimate, estimate};
 
 const BAR_COHEN_ROHSENOW: &str = "Bar-Cohen and Rohsenow, Thermally optimum spacing of vertical, natural convection cooled, parallel plates, \
      J. Heat Transfer 106 (1984) 116-123";
-const BASIS: &str =
-    "common practice; both limits are exact or measured, the blend between them is within 10 %";
-const RANGE_TEMPERATURE: &str = "laminar; channel number from 0.1 (fully developed) to 1e5 (each plate on its own); limits recalled";
-const RANGE_FLUX: &str = "laminar; flux channel number from 0.1 (fully developed) to 1e5 (each plate on its own); limits recalled";
+const BASIS: &str = "common practice; both limits are exact or measured, the blend between them is within 10 %";
+const RANGE_TEMPERATURE: &str =
+    "laminar; channel number from 0.1 (fully developed) to 1e5 (each plate on its own); limits recalled";
+const RANGE_FLUX: &str =
+    "laminar; flux channel number from 0.1 (fully developed) to 1e5 (each plate on its own); limits recalled";
 
+/// Vertical channel, both plates isothermal.
 pub const ISOTHERMAL_BOTH: Correlation = Correlation {
     name: "vertical channel, both plates isothermal",
     source: BAR_COHEN_ROHSENOW,
@@ -19,6 +21,7 @@ pub const ISOTHERMAL_BOTH: Correlation = Correlation {
     scatter_basis: BASIS,
 };
 
+/// Vertical channel, one plate isothermal, one insulated.
 pub const ISOTHERMAL_ONE: Correlation = Correlation {
     name: "vertical channel, one plate isothermal, one insulated",
     source: BAR_COHEN_ROHSENOW,
@@ -27,6 +30,7 @@ pub const ISOTHERMAL_ONE: Correlation = Correlation {
     scatter_basis: BASIS,
 };
 
+/// Vertical channel, uniform flux on both plates.
 pub const FLUX_BOTH: Correlation = Correlation {
     name: "vertical channel, uniform flux on both plates",
     source: BAR_COHEN_ROHSENOW,
@@ -35,6 +39,7 @@ pub const FLUX_BOTH: Correlation = Correlation {
     scatter_basis: BASIS,
 };
 
+/// Vertical channel, uniform flux on one plate, one insulated.
 pub const FLUX_ONE: Correlation = Correlation {
     name: "vertical channel, uniform flux on one plate, one insulated",
     source: BAR_COHEN_ROHSENOW,
@@ -59,47 +64,23 @@ fn flux(developed: f64, channel_number: f64) -> f64 {
 
 /// Both plates at one temperature: mean Nusselt number on the difference to the entering fluid.
 pub fn isothermal_both(channel_number: f64) -> Estimate {
-    estimate(
-        &ISOTHERMAL_BOTH,
-        &[channel_number],
-        0.0,
-        in_range(channel_number),
-        || isothermal(576.0, channel_number),
-    )
+    estimate(&ISOTHERMAL_BOTH, &[channel_number], 0.0, in_range(channel_number), || isothermal(576.0, channel_number))
 }
 
 /// One plate at a temperature, the other insulated: mean Nusselt number of the heated plate.
 pub fn isothermal_one(channel_number: f64) -> Estimate {
-    estimate(
-        &ISOTHERMAL_ONE,
-        &[channel_number],
-        0.0,
-        in_range(channel_number),
-        || isothermal(144.0, channel_number),
-    )
+    estimate(&ISOTHERMAL_ONE, &[channel_number], 0.0, in_range(channel_number), || isothermal(144.0, channel_number))
 }
 
 /// Uniform flux on both plates: Nusselt number at the upper edge (where the plate is hottest). The flux channel
 /// number is g α q S⁵ / (k ν a L).
 pub fn flux_both(flux_channel_number: f64) -> Estimate {
-    estimate(
-        &FLUX_BOTH,
-        &[flux_channel_number],
-        0.0,
-        in_range(flux_channel_number),
-        || flux(48.0, flux_channel_number),
-    )
+    estimate(&FLUX_BOTH, &[flux_channel_number], 0.0, in_range(flux_channel_number), || flux(48.0, flux_channel_number))
 }
 
 /// Uniform flux on one plate, the other insulated: as [`flux_both`].
 pub fn flux_one(flux_channel_number: f64) -> Estimate {
-    estimate(
-        &FLUX_ONE,
-        &[flux_channel_number],
-        0.0,
-        in_range(flux_channel_number),
-        || flux(24.0, flux_channel_number),
-    )
+    estimate(&FLUX_ONE, &[flux_channel_number], 0.0, in_range(flux_channel_number), || flux(24.0, flux_channel_number))
 }
 
 #[cfg(test)]

@@ -5,6 +5,7 @@ use super::{Correlation, Estimate, estimate};
 const CHURCHILL_CHU: &str = "Churchill and Chu, Correlating equations for laminar and turbulent free convection \
      from a vertical plate, Int. J. Heat Mass Transfer 18 (1975) 1323-1329";
 
+/// Vertical plate, isothermal.
 pub const ISOTHERMAL: Correlation = Correlation {
     name: "vertical plate, isothermal",
     source: CHURCHILL_CHU,
@@ -13,6 +14,7 @@ pub const ISOTHERMAL: Correlation = Correlation {
     scatter_basis: "common practice for plates through transition",
 };
 
+/// Vertical plate, isothermal, laminar.
 pub const ISOTHERMAL_LAMINAR: Correlation = Correlation {
     name: "vertical plate, isothermal, laminar",
     source: CHURCHILL_CHU,
@@ -21,6 +23,7 @@ pub const ISOTHERMAL_LAMINAR: Correlation = Correlation {
     scatter_basis: "common practice; the similarity solution (Ostrach 1953) lies within 1.4 % at Ra 1e8 and Prandtl numbers 0.7 to 1000, 3.3 % down to 0.01",
 };
 
+/// Vertical plate, uniform flux.
 pub const UNIFORM_FLUX: Correlation = Correlation {
     name: "vertical plate, uniform flux",
     source: CHURCHILL_CHU,
@@ -29,6 +32,7 @@ pub const UNIFORM_FLUX: Correlation = Correlation {
     scatter_basis: "common practice for plates through transition",
 };
 
+/// Vertical plate, uniform flux, laminar.
 pub const UNIFORM_FLUX_LAMINAR: Correlation = Correlation {
     name: "vertical plate, uniform flux, laminar",
     source: CHURCHILL_CHU,
@@ -64,25 +68,17 @@ fn in_full_range(rayleigh: f64) -> bool {
 /// Isothermal plate, laminar or turbulent. Rayleigh number on the height.
 pub fn isothermal(rayleigh: f64, prandtl: f64) -> Estimate {
     let inside = in_full_range(rayleigh) && prandtl > 0.0;
-    estimate(
-        &ISOTHERMAL,
-        &[rayleigh, prandtl],
-        FULL_WITHOUT_MOTION,
-        inside,
-        || full(rayleigh, prandtl, PRANDTL_ISOTHERMAL),
-    )
+    estimate(&ISOTHERMAL, &[rayleigh, prandtl], FULL_WITHOUT_MOTION, inside, || {
+        full(rayleigh, prandtl, PRANDTL_ISOTHERMAL)
+    })
 }
 
 /// Isothermal plate, laminar (closer than the full form below Ra 1e9). Rayleigh number on the height.
 pub fn isothermal_laminar(rayleigh: f64, prandtl: f64) -> Estimate {
     let inside = rayleigh > 0.0 && rayleigh <= 1e9 && prandtl > 0.0;
-    estimate(
-        &ISOTHERMAL_LAMINAR,
-        &[rayleigh, prandtl],
-        LAMINAR_WITHOUT_MOTION,
-        inside,
-        || laminar(rayleigh, prandtl, PRANDTL_ISOTHERMAL),
-    )
+    estimate(&ISOTHERMAL_LAMINAR, &[rayleigh, prandtl], LAMINAR_WITHOUT_MOTION, inside, || {
+        laminar(rayleigh, prandtl, PRANDTL_ISOTHERMAL)
+    })
 }
 
 /// Plate with uniform flux, laminar or turbulent. Rayleigh number on the height; it and the Nusselt number on the difference
@@ -90,25 +86,15 @@ pub fn isothermal_laminar(rayleigh: f64, prandtl: f64) -> Estimate {
 /// being 2^(1/5) times as large.)
 pub fn uniform_flux(rayleigh: f64, prandtl: f64) -> Estimate {
     let inside = in_full_range(rayleigh) && prandtl > 0.0;
-    estimate(
-        &UNIFORM_FLUX,
-        &[rayleigh, prandtl],
-        FULL_WITHOUT_MOTION,
-        inside,
-        || full(rayleigh, prandtl, PRANDTL_FLUX),
-    )
+    estimate(&UNIFORM_FLUX, &[rayleigh, prandtl], FULL_WITHOUT_MOTION, inside, || full(rayleigh, prandtl, PRANDTL_FLUX))
 }
 
 /// Plate with uniform flux, laminar. Rayleigh number as in [`uniform_flux`].
 pub fn uniform_flux_laminar(rayleigh: f64, prandtl: f64) -> Estimate {
     let inside = rayleigh > 0.0 && rayleigh <= 1e9 && prandtl > 0.0;
-    estimate(
-        &UNIFORM_FLUX_LAMINAR,
-        &[rayleigh, prandtl],
-        LAMINAR_WITHOUT_MOTION,
-        inside,
-        || laminar(rayleigh, prandtl, PRANDTL_FLUX),
-    )
+    estimate(&UNIFORM_FLUX_LAMINAR, &[rayleigh, prandtl], LAMINAR_WITHOUT_MOTION, inside, || {
+        laminar(rayleigh, prandtl, PRANDTL_FLUX)
+    })
 }
 
 /// Plate with uniform flux where only the flux is known: the flux Rayleigh number is
