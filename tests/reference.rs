@@ -1,5 +1,7 @@
 //! Holds the language reference that a user reads (grammar/README.md) against the language.
 
+#![allow(clippy::unwrap_used, clippy::panic)]
+
 use deckline::case::sweep::SWEEP_POINTS;
 use deckline::quantity::unit_parser::LONGEST_UNIT;
 use deckline::syntax::{Level, limits, parse};

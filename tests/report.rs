@@ -1,5 +1,7 @@
 //! The faces of a report, shown findings that are made by hand.
 
+#![allow(clippy::unwrap_used, clippy::panic)]
+
 use deckline::case::Resolution;
 use deckline::case::model::{Case, Name};
 use deckline::physics::model::Physics;

@@ -106,6 +106,9 @@ pub fn run(arguments: &Arguments) -> u8 {
         }
     }
     if arguments.watch {
+        if arguments.from_list.as_deref() == Some(Path::new("-")) {
+            return terminal::fail("standard input is read only once, so `--from-list -` does not go with `--watch`");
+        }
         return watch::run(arguments);
     }
     let assessment = assess(arguments);

@@ -39,6 +39,7 @@ fn split(text: &str) -> Option<(f64, &str)> {
     })
 }
 
+#[allow(clippy::unwrap_used, clippy::panic)]
 #[cfg(test)]
 mod tests {
     use super::*;

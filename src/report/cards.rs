@@ -14,7 +14,7 @@
 
 use super::paint::{Paint, harmless};
 use super::sheet::{Remark, Report, Sheet, Spot};
-use super::wrap;
+use super::wrap::{self, sentence};
 use super::{Layout, scale};
 use crate::syntax::Level;
 use std::io::{self, Write};
@@ -49,7 +49,7 @@ fn deck(sheet: &Sheet, out: &mut dyn Write, layout: Layout) -> io::Result<()> {
             heading(remark, sheet, out, layout)?;
         }
         let same_line = same_entry && above.is_some_and(|above| above.spot.start.line == remark.spot.start.line);
-        card(remark, !same_line, out, layout)?;
+        card(remark, above.filter(|_| same_entry), !same_line, out, layout)?;
         above = Some(remark);
     }
     if !waived.is_empty() {
@@ -74,7 +74,13 @@ fn heading(remark: &Remark, sheet: &Sheet, out: &mut dyn Write, layout: Layout) 
     }
 }
 
-fn card(remark: &Remark, with_line: bool, out: &mut dyn Write, layout: Layout) -> io::Result<()> {
+fn card(
+    remark: &Remark,
+    above: Option<&Remark>,
+    with_line: bool,
+    out: &mut dyn Write,
+    layout: Layout,
+) -> io::Result<()> {
     let (finding, indent) = (&remark.finding, " ".repeat(REMARK));
     let paint = layout.paint;
     writeln!(out)?;
@@ -86,7 +92,7 @@ fn card(remark: &Remark, with_line: bool, out: &mut dyn Write, layout: Layout) -
     }
     let level = paint.level(finding.level, finding.level.word()).to_string();
     writeln!(out, "{indent}{}, {level}", paint.strong(finding.check))?;
-    wrap::paragraph(out, &harmless(&remark.whole_message()), REMARK, 0, layout.width)?;
+    wrap::paragraph(out, &sentence(&harmless(&remark.whole_message())), REMARK, 0, layout.width)?;
     if let Some(drawn) =
         finding.margin.as_ref().and_then(|margin| scale::line(margin, layout.width.min(wrap::WIDEST) - REMARK - 2))
     {
@@ -95,9 +101,12 @@ fn card(remark: &Remark, with_line: bool, out: &mut dyn Write, layout: Layout) -
     if let Some(remedy) = remedy(remark) {
         wrap::paragraph(out, &harmless(&remedy), REMARK, 2, layout.width)?;
     }
-    for (related, spot) in finding.related.iter().zip(&remark.related) {
+    // Findings about one span of temperatures all point to what sets it: once is enough.
+    let said_above = above.is_some_and(|above| above.finding.related == finding.related);
+    for (related, spot) in finding.related.iter().zip(&remark.related).filter(|_| !said_above) {
         let place = place_beside(spot, &remark.spot);
-        wrap::paragraph(out, &format!("See {place}: {}", harmless(&related.message)), REMARK, 2, layout.width)?;
+        let text = sentence(&format!("See {place}: {}", harmless(&related.message)));
+        wrap::paragraph(out, &text, REMARK, 2, layout.width)?;
     }
     if !remark.also_in.is_empty() {
         wrap::paragraph(out, &format!("Also in {}.", shortened(&remark.also_in)), REMARK, 2, layout.width)?;
@@ -115,10 +124,6 @@ fn remedy(remark: &Remark) -> Option<String> {
     let mut letters = fix.title.chars();
     let first: String = letters.next().map(|first| first.to_lowercase().collect()).unwrap_or_default();
     Some(sentence(&format!("To put it right, {first}{}", letters.as_str())))
-}
-
-fn sentence(text: &str) -> String {
-    if text.ends_with(['.', '!', '?']) { text.to_string() } else { format!("{text}.") }
 }
 
 fn waivers(waived: &[&Remark], out: &mut dyn Write, layout: Layout) -> io::Result<()> {

@@ -3,6 +3,7 @@
 
 use super::paint::harmless;
 use super::sheet::{Remark, Report};
+use super::wrap::sentence;
 use std::io::{self, Write};
 
 /// Writes the lines.
@@ -21,8 +22,7 @@ fn line(remark: &Remark) -> String {
     let (finding, start) = (&remark.finding, remark.spot.start);
     let mut text = remark.whole_message();
     if !finding.remedy.is_empty() {
-        text.push_str(" Put right by: ");
-        text.push_str(&finding.remedy);
+        text.push_str(&sentence(&format!(" Put right by: {}", finding.remedy)));
     }
     let (file, text) = (harmless(&remark.spot.file), harmless(&text));
     format!("{file}:{}:{}: {}: {text} [{}]", start.line, start.column, finding.level.word(), finding.check)

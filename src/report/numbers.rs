@@ -5,8 +5,10 @@
 use super::json::{LevelWord, Tool, Weighed};
 use super::paint::harmless;
 use super::substance::rows as property_rows;
+use super::wrap::sentence;
 use super::{Layout, scale, wrap};
 use crate::case::model::{Case, Region};
+use crate::checks::{self, Family};
 use crate::physics::model::{ArrangementKind, Bound, Numbers as Computed, RegionPhysics};
 use crate::quantity::Dimension;
 use crate::quantity::dimension_names::{
@@ -37,7 +39,7 @@ pub struct Numbers {
     pub title: String,
     /// In a sweep: at which of its points the numbers hold; empty without one.
     pub point: String,
-    /// Errors in the deck: while there are any, numbers may be missing.
+    /// Errors of writing and units in the deck: while there are any, numbers may be missing.
     pub errors: usize,
     /// Gravity, m/s².
     pub gravity: Option<f64>,
@@ -148,11 +150,17 @@ impl Numbers {
             deck: deck.files.first().map(|file| file.path.to_string_lossy().into_owned()).unwrap_or_default(),
             title: case.title.as_ref().map(|title| title.text.to_string()).unwrap_or_default(),
             point: point(deck),
-            errors: deck.findings.iter().filter(|finding| finding.level == Level::Error).count(),
+            errors: deck.findings.iter().filter(|finding| hides_values(finding)).count(),
             gravity: finite(case.gravity.magnitude),
             regions: regions.map(|(region, physics)| region_numbers(case, region, physics, &deck.findings)).collect(),
         }
     }
+}
+
+/// Whether a finding says that something could not be read, so that what depends on it is not known.
+fn hides_values(finding: &Finding) -> bool {
+    let family = checks::find(finding.check).map(|check| check.family);
+    finding.level == Level::Error && matches!(family, None | Some(Family::Writing | Family::Units))
 }
 
 fn region_numbers(case: &Case, region: &Region, physics: &RegionPhysics, findings: &[Finding]) -> RegionNumbers {
@@ -349,10 +357,14 @@ pub fn write(numbers: &Numbers, out: &mut dyn Write, layout: Layout) -> io::Resu
             layout.width,
         )?;
     }
-    match numbers.errors {
-        0 => {}
-        1 => writeln!(out, "  The deck has 1 error; numbers may be missing until it is put right.")?,
-        more => writeln!(out, "  The deck has {more} errors; numbers may be missing until they are put right.")?,
+    let (errors, they_are) = match numbers.errors {
+        1 => ("an error".to_string(), "it is"),
+        more => (format!("{more} errors"), "they are"),
+    };
+    if numbers.errors > 0 {
+        let text =
+            format!("The deck has {errors} of writing or units; numbers may be missing until {they_are} put right.");
+        wrap::paragraph(out, &text, 2, 0, layout.width)?;
     }
     if let Some(gravity) = numbers.gravity {
         writeln!(out, "  Gravity is {} m/s^2.", format_number(gravity))?;
@@ -379,7 +391,7 @@ fn about(region: &RegionNumbers, out: &mut dyn Write, layout: Layout) -> io::Res
     if !region.arrangement.is_empty() {
         wrap::paragraph(
             out,
-            &format!("Taken as {}. {}", region.arrangement, region.arrangement_why),
+            &sentence(&format!("Taken as {}: {}", region.arrangement, region.arrangement_why)),
             4,
             2,
             layout.width,
@@ -395,16 +407,11 @@ fn about(region: &RegionNumbers, out: &mut dyn Write, layout: Layout) -> io::Res
     }
     for end in &region.temperatures {
         let Some(temperature) = end.temperature else { continue };
-        let band = end.band.map_or(String::new(), |(from, to)| {
-            format!(" ({} to {})", format_si(from, TEMPERATURE), format_si(to, TEMPERATURE))
-        });
+        let (shown, band) = (format_si(temperature, TEMPERATURE), end.band.unwrap_or((temperature, temperature)));
+        let (from, to) = (format_si(band.0, TEMPERATURE), format_si(band.1, TEMPERATURE));
+        let band = if from == to { String::new() } else { format!(" ({from} to {to})") };
         let estimate = end.estimate.as_ref().map_or(String::new(), |how| format!(", estimated: {how}"));
-        let text = format!(
-            "The {} temperature is {}{band}, set by {}{estimate}.",
-            end.end,
-            format_si(temperature, TEMPERATURE),
-            end.set_by
-        );
+        let text = format!("The {} temperature is {shown}{band}, set by {}{estimate}.", end.end, end.set_by);
         wrap::paragraph(out, &harmless(&text), 4, 2, layout.width)?;
     }
     Ok(())

@@ -58,6 +58,7 @@ impl<'a> Index<'a> {
     }
 }
 
+#[allow(clippy::unwrap_used, clippy::panic)]
 #[cfg(test)]
 mod tests {
     use super::*;

@@ -3,6 +3,7 @@
 
 use super::basis;
 use super::sheet::{Remark, Report, Sheet, Spot, Unreadable};
+use super::wrap::sentence;
 use crate::checks::CHECKS;
 use crate::syntax::Level;
 use percent_encoding::{AsciiSet, NON_ALPHANUMERIC, utf8_percent_encode};
@@ -79,7 +80,7 @@ fn result(remark: &Remark, rule_index: Option<i64>) -> SarifResult {
     let finding = &remark.finding;
     let mut said = remark.whole_message();
     if !finding.remedy.is_empty() {
-        said = format!("{said} Put right by: {}", finding.remedy);
+        said = sentence(&format!("{said} Put right by: {}", finding.remedy));
     }
     let mut here = location(&remark.spot);
     here.logical_locations = logical(remark);

@@ -2,6 +2,7 @@
 
 use super::count::Count;
 use super::position::{Index, Position};
+use super::wrap::sentence;
 use crate::syntax::tree::{Content, Entry};
 use crate::syntax::{Finding, Level, Place};
 use crate::workspace::deck::{Deck, SourceFile};
@@ -167,7 +168,7 @@ impl Remark {
 
     /// The message and what stands beside it in one paragraph.
     pub fn whole_message(&self) -> String {
-        let mut said = self.finding.message.clone();
+        let mut said = sentence(&self.finding.message);
         if let Some(points) = &self.finding.points {
             said.push_str(&format!(" At {} of {} points, first at {}.", points.count, points.total, points.first));
         }

@@ -34,6 +34,11 @@ pub fn lines(text: &str, indent: usize, hanging: usize, width: usize) -> Vec<Str
     textwrap::wrap(&bound, options).into_iter().map(|line| line.replace(BOND, " ")).collect()
 }
 
+/// The text with a full stop, where it does not end a sentence yet.
+pub fn sentence(text: &str) -> String {
+    if text.is_empty() || text.ends_with(['.', '!', '?', ':']) { text.to_string() } else { format!("{text}.") }
+}
+
 /// Stands for a space at which no line may end. A private character of the width of a space.
 const BOND: char = '\u{e000}';
 

@@ -280,6 +280,7 @@ fn prefixes() -> String {
     )
 }
 
+#[allow(clippy::unwrap_used, clippy::panic)]
 #[cfg(test)]
 mod tests {
     use super::*;
