@@ -30,7 +30,8 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             continue;
         }
         let brinkman = brinkman_number(physics);
-        let Some((level, limit)) = brinkman.over(weighing) else { continue };
+        // Without a difference of temperatures nothing conducts, and no share of it can be told.
+        let Some((level, limit)) = brinkman.over(weighing).filter(|_| brinkman.value.is_finite()) else { continue };
         let place = region.viscous_heating.map_or(region.name.place, |off| off.place);
         let message = format!(
             "Friction is not computed in `{}`, and at {} it gives {} of the heat that conduction passes.{}",
