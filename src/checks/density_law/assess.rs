@@ -258,3 +258,34 @@ pub fn two_digits(value: f64) -> String {
     let digits = if value.abs() >= 100.0 { 2 } else { 1 };
     format!("{value:.digits$e}").parse().map_or_else(|_| format_number(value), |rounded: f64| format_number(rounded))
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    fn limits() -> Weighing {
+        Weighing { limits: vec![(Level::Warning, 0.1), (Level::Error, 0.2)], level: Level::Warning }
+    }
+
+    #[test]
+    fn an_estimate_is_a_level_milder_unless_its_whole_band_is_over() {
+        let level = |value, band| weight(value, band, &limits()).over.map(|(level, _)| level);
+        assert_eq!(level(0.15, None), Some(Level::Warning));
+        assert_eq!(level(0.15, Some((0.12, 0.18))), Some(Level::Warning));
+        assert_eq!(level(0.15, Some((0.08, 0.22))), Some(Level::Information));
+        assert_eq!(level(0.25, Some((0.15, 0.35))), Some(Level::Warning));
+        assert_eq!(level(0.09, Some((0.05, 0.3))), None);
+        assert_eq!(level(f64::NAN, None), None);
+        assert_eq!(level(f64::NAN, Some((f64::NAN, f64::NAN))), None);
+    }
+
+    #[test]
+    fn shares_are_written_short() {
+        assert_eq!(per_cent(0.3124), "31 %");
+        assert_eq!(per_cent(0.0512), "5.1 %");
+        assert_eq!(per_cent(6.374), "637 %");
+        assert_eq!(two_digits(0.15093), "0.15");
+        assert_eq!(two_digits(47.3), "47");
+        assert_eq!(two_digits(107.4), "107");
+    }
+}
