@@ -3,12 +3,13 @@
 
 use super::criterion::{Conditions, CriterionValues, evaluate_at, of_constants};
 use crate::case::model::{Case, DensityLaw, Fluid, Region};
+pub use crate::checks::look::celsius as temperature;
+use crate::checks::look::sentence;
 use crate::checks::properties::slip::is_slip_of_bound;
 use crate::checks::properties::slip_of_state;
 use crate::checks::{Check, Subject, Weighing};
 use crate::physics::model::{Bracket, RegionPhysics};
-use crate::quantity::dimension_names::TEMPERATURE;
-use crate::quantity::display::{format_number, format_si};
+use crate::quantity::display::format_number;
 use crate::substances::{Medium, Properties};
 use crate::syntax::{Finding, Fix, Level, Margin, Place};
 
@@ -190,7 +191,7 @@ impl Weighed {
                 band: weight.band,
                 unit: String::new(),
             };
-            let mut finding = Finding::new(self.check.name, level, region.place(), message)
+            let mut finding = Finding::new(self.check.name, level, region.place(), sentence(&message))
                 .remedy(remedy)
                 .about(&*region.region.name.text)
                 .weighing(margin);
@@ -235,11 +236,6 @@ fn rests_on(bracket: &Bracket, weight: &Weight) -> String {
         ),
         _ => String::new(),
     }
-}
-
-/// A temperature as people read it.
-pub fn temperature(kelvin: f64) -> String {
-    format_si(kelvin, TEMPERATURE)
 }
 
 /// The same to a tenth of a degree Celsius, for a property of the substance that is known no better.

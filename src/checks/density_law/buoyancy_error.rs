@@ -3,6 +3,7 @@
 use super::assess::{Said, Weighed, per_cent, temperature};
 use super::criterion::{CriterionValues, Sample};
 use super::remedy;
+use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::display::format_difference;
 use crate::substances::Properties;
@@ -72,7 +73,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         let ends = [(&bracket.lowest, "goes down to"), (&bracket.highest, "reaches")];
         let end = ends.into_iter().find(|(bound, _)| (bound.value - at).abs() < 1e-6);
         let place = end.map_or_else(
-            || format!("{} comes to {}", region.region.name.text, temperature(at)),
+            || format!("{} comes to {}", named(&region.region.name), temperature(at)),
             |(bound, verb)| format!("{} {verb} {}", bound.set_by, temperature(at)),
         );
         let side = if at >= reference { "above" } else { "below" };
@@ -97,7 +98,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             message: format!(
                 "{place}, {} {side} the reference of {}: {off}; it is held to {}",
                 format_difference((at - reference).abs()),
-                region.fluid.name.text,
+                named(&region.fluid.name),
                 per_cent(limit),
             ),
             remedy: remedy::join(&[Some(remedy::by_other_law(region)), centred, remedy::narrower(region, PICK, first)]),
@@ -119,7 +120,7 @@ mod tests {
 fluid content
     substance   water
     reference   40 degC
-    density-law boussinesq   #! buoyancy-error "53 K above the reference of content: buoyancy there is 43 % more than the linear law gives"
+    density-law boussinesq   #! buoyancy-error "53 K above the reference of `content`: buoyancy there is 43 % more than the linear law gives"
 region tank
     box         0.5 m by 0.6 m by 1.1 m
     filled with content

@@ -2,6 +2,7 @@
 
 use super::assess::{Said, Weighed, temperature};
 use super::{criterion::CriterionValues, remedy};
+use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::display::{format_difference, format_number};
 use crate::syntax::{Finding, Level};
@@ -38,7 +39,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             message: format!(
                 "αΔT is {} in {}, between {} ({}) and {} ({}), {} apart; the Boussinesq law is held to {}",
                 format_number(value),
-                region.region.name.text,
+                named(&region.region.name),
                 temperature(low.value),
                 low.set_by,
                 temperature(high.value),
@@ -226,7 +227,7 @@ boundary cool of tank
 "##;
         let found = crate::testing::findings(text);
         let advice = found.iter().find(|finding| finding.check == CHECK.name).map(|finding| finding.remedy.clone());
-        assert_eq!(advice.as_deref(), Some("`density-law ideal-gas`, or boundary warm below 54.8 degC."));
+        assert_eq!(advice.as_deref(), Some("`density-law ideal-gas`, or boundary warm below 54.8 degC"));
         // 29.8 K / 298.15 K is 0.09995, 29.9 K would be 0.1003.
         expect_of(CHECK.name, &text.replace("70 degC", "54.8 degC"));
     }

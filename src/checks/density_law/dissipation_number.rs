@@ -2,6 +2,7 @@
 
 use super::assess::{Said, Weighed};
 use super::{criterion::CriterionValues, remedy};
+use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::display::format_number;
 use crate::syntax::{Finding, Level};
@@ -44,7 +45,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             "αgH/cp is {} over the {} m of {}: the heat of friction is no longer small; the Boussinesq energy equation leaves it out and is held to {}",
             format_number(value),
             format_number(region.conditions.height),
-            region.region.name.text,
+            named(&region.region.name),
             format_number(limit),
         ),
         remedy: remedy::join(&[
@@ -68,7 +69,7 @@ mod tests {
 fluid content
     substance   air
     reference   10 degC
-    density-law boussinesq   #! dissipation-number "over the 4000 m"
+    density-law boussinesq   #! dissipation-number "4000 m of `tank`"
 region tank
     box         5 km by 5 km by 4 km
     filled with content

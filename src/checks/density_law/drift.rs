@@ -3,6 +3,7 @@
 use super::assess::{Assessed, Said, per_cent, temperature};
 use super::criterion::{CriterionValues, Sample};
 use super::remedy;
+use crate::checks::look::named;
 use crate::quantity::Dimension;
 use crate::quantity::display::format_si;
 use crate::substances::Properties;
@@ -39,7 +40,7 @@ pub fn said(assessed: &Assessed<'_>, value: f64, limit: f64, of: &Drifting, by_f
     Said {
         message: format!(
             "the {name} of {} {}, by {} of its value at the reference, {}; held constant, it is taken to {}",
-            assessed.fluid.name.text,
+            named(&assessed.fluid.name),
             course(assessed, value, of),
             per_cent(value),
             temperature(assessed.conditions.reference),

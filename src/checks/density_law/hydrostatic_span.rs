@@ -2,6 +2,7 @@
 
 use super::assess::{Said, Weighed};
 use super::{criterion::CriterionValues, remedy};
+use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::display::format_number;
 use crate::syntax::{Finding, Level};
@@ -36,8 +37,8 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         message: format!(
             "over the {} m of {}, the weight of {} alone changes its density by {} of itself; the Boussinesq law is held to {}",
             format_number(region.conditions.height),
-            region.region.name.text,
-            region.fluid.name.text,
+            named(&region.region.name),
+            named(&region.fluid.name),
             format_number(value),
             format_number(limit),
         ),
@@ -62,7 +63,7 @@ mod tests {
 fluid content
     substance   air
     reference   15 degC
-    density-law boussinesq   #! hydrostatic-span "over the 900 m of tank"
+    density-law boussinesq   #! hydrostatic-span "900 m of `tank`"
 region tank
     box         5 m by 5 m by 900 m
     filled with content
