@@ -1,6 +1,6 @@
 //! `adiabatic-lapse`: the work of pressure against the heat that is carried by convection.
 
-use super::assess::{Said, Weighed};
+use super::assess::{Said, Weighed, three_digits};
 use super::{criterion::CriterionValues, remedy};
 use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
@@ -46,7 +46,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             format_number(region.conditions.height),
             named(&region.region.name),
             format_difference(value * region.bracket.span()),
-            format_number(value),
+            three_digits(value),
             format_difference(region.bracket.span()),
             format_number(limit),
         ),

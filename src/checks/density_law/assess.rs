@@ -231,8 +231,8 @@ fn rests_on(bracket: &Bracket, weight: &Weight) -> String {
             bound.set_by,
             temperature(bound.band.0),
             temperature(bound.band.1),
-            format_number(least),
-            format_number(greatest)
+            three_digits(least),
+            three_digits(greatest)
         ),
         _ => String::new(),
     }
@@ -251,8 +251,17 @@ pub fn per_cent(share: f64) -> String {
 
 /// A number to two or, from 100 on, three digits.
 pub fn two_digits(value: f64) -> String {
-    let digits = if value.abs() >= 100.0 { 2 } else { 1 };
-    format!("{value:.digits$e}").parse().map_or_else(|_| format_number(value), |rounded: f64| format_number(rounded))
+    rounded_to(if value.abs() >= 100.0 { 3 } else { 2 }, value)
+}
+
+/// A number to three digits.
+pub fn three_digits(value: f64) -> String {
+    rounded_to(3, value)
+}
+
+fn rounded_to(digits: usize, value: f64) -> String {
+    let places = digits.saturating_sub(1);
+    format!("{value:.places$e}").parse().map_or_else(|_| format_number(value), |rounded: f64| format_number(rounded))
 }
 
 #[cfg(test)]
@@ -283,5 +292,6 @@ mod tests {
         assert_eq!(two_digits(0.15093), "0.15");
         assert_eq!(two_digits(47.3), "47");
         assert_eq!(two_digits(107.4), "107");
+        assert_eq!(three_digits(0.15093), "0.151");
     }
 }

@@ -1,6 +1,6 @@
 //! `density-span`: αΔT, the share by which density changes over the span.
 
-use super::assess::{Said, Weighed, temperature};
+use super::assess::{Said, Weighed, temperature, three_digits};
 use super::{criterion::CriterionValues, remedy};
 use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
@@ -38,7 +38,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         Said {
             message: format!(
                 "αΔT is {} in {}, between {} ({}) and {} ({}), {} apart; the Boussinesq law is held to {}",
-                format_number(value),
+                three_digits(value),
                 named(&region.region.name),
                 temperature(low.value),
                 low.set_by,
@@ -69,7 +69,7 @@ mod tests {
 fluid content
     substance   air
     reference   25 degC at 0.79 bar
-    density-law boussinesq   #! density-span "αΔT is 0.1509"
+    density-law boussinesq   #! density-span "αΔT is 0.151"
 region tank
     box         0.5 m by 0.6 m by 1.1 m
     filled with content

@@ -1,6 +1,6 @@
 //! `dissipation-number`: the heat of friction against the heat that is carried by convection.
 
-use super::assess::{Said, Weighed};
+use super::assess::{Said, Weighed, three_digits};
 use super::{criterion::CriterionValues, remedy};
 use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
@@ -43,7 +43,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     NUMBER.findings(subject, weighing, |region, value, limit| Said {
         message: format!(
             "αgH/cp is {} over the {} m of {}: the heat of friction is no longer small; the Boussinesq energy equation leaves it out and is held to {}",
-            format_number(value),
+            three_digits(value),
             format_number(region.conditions.height),
             named(&region.region.name),
             format_number(limit),

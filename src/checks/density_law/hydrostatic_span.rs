@@ -1,6 +1,6 @@
 //! `hydrostatic-span`: the change of density under the fluid's own weight.
 
-use super::assess::{Said, Weighed};
+use super::assess::{Said, Weighed, three_digits};
 use super::{criterion::CriterionValues, remedy};
 use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
@@ -39,7 +39,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             format_number(region.conditions.height),
             named(&region.region.name),
             named(&region.fluid.name),
-            format_number(value),
+            three_digits(value),
             format_number(limit),
         ),
         remedy: remedy::join(&[

@@ -1,6 +1,6 @@
 //! `low-mach`: velocities small against the speed of sound.
 
-use super::assess::{Assessed, Said, Weighed};
+use super::assess::{Assessed, Said, Weighed, three_digits};
 use super::criterion::CriterionValues;
 use super::remedy;
 use crate::checks::look::named;
@@ -51,7 +51,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
                 named(&region.region.name),
                 format_si(fastest, SPEED),
                 if is_buoyant { "√(g α ΔT H)" } else { "given" },
-                format_number(value),
+                three_digits(value),
                 format_number(limit),
             ),
             remedy: remedy::join(&[
