@@ -1,7 +1,7 @@
 //! What several checks look at alike: regions with their physics, bands of estimates, and how numbers are worded.
 
 use super::check::{Subject, Weighing};
-use crate::case::model::{Boundary, Case, Region};
+use crate::case::model::{Boundary, Case, Name, Region};
 use crate::physics::model::{Bracket, RegionPhysics};
 use crate::quantity::display::format_si;
 use crate::syntax::{Finding, Level, Margin};
@@ -108,6 +108,20 @@ pub fn celsius(kelvin: f64) -> String {
     format_si(kelvin, TEMPERATURE)
 }
 
+/// A sentence from its words: with a capital, where it begins with a Latin letter, and a full stop.
+pub fn sentence(words: &str) -> String {
+    let mut letters = words.chars();
+    match letters.next() {
+        Some(first) => format!("{}{}.", first.to_ascii_uppercase(), letters.as_str()),
+        None => String::new(),
+    }
+}
+
+/// A name as a sentence has it.
+pub fn named(name: &Name) -> String {
+    format!("`{}`", name.text)
+}
+
 /// Names as a sentence has them: "`a`, `b` and `c`".
 pub fn listed(names: &[&str]) -> String {
     let quoted: Vec<String> = names.iter().map(|name| format!("`{name}`")).collect();
@@ -119,7 +133,7 @@ pub fn listed(names: &[&str]) -> String {
 }
 
 /// A finding about an entity, whose name a waiver may give.
-pub fn finding_of(check: &'static str, level: Level, name: &crate::case::model::Name, message: String) -> Finding {
+pub fn finding_of(check: &'static str, level: Level, name: &Name, message: String) -> Finding {
     Finding::new(check, level, name.place, message).about(&*name.text)
 }
 
@@ -160,6 +174,13 @@ mod tests {
         assert_eq!(level(0.5, 0.9, 1.5), None);
         assert_eq!(Weighed::given(1.2).over(&weighing), Some((Level::Warning, 1.0)));
         assert_eq!(Weighed::given(f64::NAN).over(&weighing), None);
+    }
+
+    #[test]
+    fn sentences() {
+        assert_eq!(sentence("the lid reaches 93 degC"), "The lid reaches 93 degC.");
+        assert_eq!(sentence("αΔT is 0.15"), "αΔT is 0.15.");
+        assert_eq!(sentence(""), "");
     }
 
     #[test]

@@ -92,19 +92,14 @@ fn cautious(kelvin: f64, is_highest: bool) -> f64 {
     273.15 + 0.1 * rounded
 }
 
-/// Advice joined: "A, B, or C."
+/// Advice joined: "A, B, or C".
 pub fn join(options: &[Option<String>]) -> String {
     let options: Vec<&str> = options.iter().flatten().map(String::as_str).collect();
     match options.split_last() {
         None => String::new(),
-        Some((last, [])) => sentence(last),
-        Some((last, rest)) => sentence(&format!("{}, or {last}", rest.join(", "))),
+        Some((last, [])) => (*last).to_string(),
+        Some((last, rest)) => format!("{}, or {last}", rest.join(", ")),
     }
-}
-
-fn sentence(text: &str) -> String {
-    let mut letters = text.chars();
-    letters.next().map_or_else(String::new, |first| format!("{}{}.", first.to_uppercase(), letters.as_str()))
 }
 
 /// The unit in which the reference is written.
