@@ -9,6 +9,7 @@ pub mod command;
 pub mod physics;
 pub mod quantity;
 pub mod report;
+pub mod server;
 pub mod substances;
 pub mod syntax;
 #[doc(hidden)]
