@@ -217,4 +217,69 @@ mod tests {
         let checks: Vec<&str> = deck.findings.iter().map(|finding| finding.check).collect();
         assert_eq!(checks.iter().filter(|check| check.starts_with("include-")).count(), 2, "{checks:?}");
     }
+
+    /// The offset of a position, worked out the long way round.
+    fn naive_offset(text: &str, line: usize, column: usize, encoding: Encoding) -> usize {
+        let mut starts = vec![0];
+        let bytes = text.as_bytes();
+        for (at, byte) in bytes.iter().enumerate() {
+            if *byte == b'\n' || (*byte == b'\r' && bytes.get(at + 1) != Some(&b'\n')) {
+                starts.push(at + 1);
+            }
+        }
+        let Some(start) = starts.get(line).copied() else { return text.len() };
+        let mut units = 0;
+        for (at, character) in text[start..].char_indices() {
+            units += if encoding == Encoding::Utf8 { character.len_utf8() } else { character.len_utf16() };
+            if units > column || character == '\n' || character == '\r' {
+                return start + at;
+            }
+        }
+        text.len()
+    }
+
+    #[test]
+    fn after_thousands_of_edits_text_and_tree_are_those_of_a_fresh_open() {
+        let pieces = ["", "x", " ", "\n", "\r\n", "\r", "α", "🌡", "e\u{301}", "given\n    T = 3 K\n", "run\n", "# c\n", "\u{2028}"];
+        // Numbers that only look random (xorshift, G. Marsaglia, J. Stat. Software 8(14), 2003).
+        let mut seed = 0x2545_f491_4f6c_dd1d_u64;
+        let mut below = |bound: u64| {
+            seed ^= seed << 13;
+            seed ^= seed >> 7;
+            seed ^= seed << 17;
+            seed % bound
+        };
+        for encoding in [Encoding::Utf8, Encoding::Utf16] {
+            let mut world = World { encoding, ..World::default() };
+            let mut copy = String::from("given\r\n    a = 1 m\n\nregion b\n    box 1 m by 2 m\n");
+            world.open(uri("a.buoy"), 0, &copy);
+            for version in 1..3000 {
+                let changes: Vec<TextDocumentContentChangeEvent> = (0..1 + below(3))
+                    .map(|_| {
+                        let mut place = || (below(12) as u32, below(14) as u32);
+                        let (from, to) = (place(), place());
+                        let piece = pieces[below(pieces.len() as u64) as usize];
+                        let start = naive_offset(&copy, from.0 as usize, from.1 as usize, encoding);
+                        let end = naive_offset(&copy, to.0 as usize, to.1 as usize, encoding).max(start);
+                        copy.replace_range(start..end, piece);
+                        let position = |(line, column)| tower_lsp::lsp_types::Position::new(line, column);
+                        let range = tower_lsp::lsp_types::Range::new(position(from), position(to));
+                        TextDocumentContentChangeEvent { range: Some(range), range_length: None, text: piece.into() }
+                    })
+                    .collect();
+                world.edit(&uri("a.buoy"), version, &changes);
+                let document = world.documents.get(&uri("a.buoy")).expect("open");
+                assert_eq!(document.text.to_string(), copy, "version {version}");
+                // Parsed now and then only, so that entries are taken over across several edits.
+                if below(3) == 0 {
+                    let parsed = document.parsed().expect("small");
+                    let fresh = crate::syntax::parse(&copy);
+                    let entries = |tree: &crate::syntax::tree::Tree| {
+                        tree.entries.iter().map(|placed| (placed.start, placed.entry.clone())).collect::<Vec<_>>()
+                    };
+                    assert_eq!(entries(&parsed.tree), entries(&fresh), "version {version}");
+                }
+            }
+        }
+    }
 }
