@@ -1,6 +1,5 @@
 //! A quantity of the deck as an amount: its value in SI and in other units.
 
-use super::numbers;
 use crate::quantity::dimension_names::usual_units;
 use crate::quantity::{Dimension, Scale, Unit, parse_unit};
 use crate::syntax::tree::{Expression, ExpressionKind, Mark, Quantity};
@@ -77,17 +76,10 @@ impl Amount<'_> {
         Some(unit.from_si(self.si()))
     }
 
-    /// The amount in the other usual units, as texts: "313.15 K".
-    pub fn elsewhere(&self) -> Vec<(&'static str, String)> {
-        let mut found: Vec<(&'static str, String)> = Vec::new();
-        for other in usual_units(self.dimension()).iter().copied() {
-            if other == self.unit_text || other == "1" {
-                continue;
-            }
-            if let Some(number) = self.number_in(other).and_then(numbers::exact) {
-                found.push((other, format!("{number} {other}")));
-            }
-        }
-        found
+    /// The amount in the other usual units: the number and the unit.
+    pub fn elsewhere(&self) -> Vec<(f64, &'static str)> {
+        let others = usual_units(self.dimension()).iter().copied();
+        let others = others.filter(|other| *other != self.unit_text && *other != "1");
+        others.filter_map(|other| Some((self.number_in(other)?, other))).collect()
     }
 }

@@ -11,7 +11,8 @@ use super::amount::{amount, literal};
 use super::hover_entity;
 use super::library;
 use super::names_here::{in_words, value_of};
-use super::spot::{Spot, spot, word_of};
+use super::numbers;
+use super::spot::{Spot, spot};
 use crate::case::resolution::ResolvedGiven;
 use crate::quantity::display;
 use crate::syntax::tree::{Content, Expression, ExpressionKind, Word};
@@ -107,25 +108,24 @@ fn quantity(deck: &Deck, spot: &Spot<'_>, path: &[&Expression]) -> Option<Hover>
     let span = spot.placed(whole.span);
     let written = whole.span.of(&spot.entry.text);
     let Some(amount) = amount(quantity, negative, kind) else {
-        return quantity
-            .unit
-            .is_none()
-            .then(|| Hover { span, markdown: format!("**{written}**  \na plain number") });
+        return quantity.unit.is_none().then(|| Hover { span, markdown: format!("**{written}**  \na plain number") });
     };
     let mut what = amount.dimension().words();
     if amount.dimension() == TEMPERATURE && amount.is_difference {
         what = "a difference of temperatures".to_string();
     }
-    let elsewhere: Vec<String> = amount.elsewhere().into_iter().map(|(_, text)| text).collect();
+    let elsewhere: Vec<String> = amount
+        .elsewhere()
+        .into_iter()
+        .map(|(number, unit)| format!("{} {unit}", numbers::rounded(number, 6)))
+        .collect();
     let mut markdown = format!("**{written}**  \n{what} ({})", amount.dimension().base_units());
     if !elsewhere.is_empty() {
         markdown.push_str(&format!("\n\n= {}", elsewhere.join(" = ")));
     }
     let says = match spot.statement().and_then(|row| library_at_reference(deck, spot, row.word)) {
         Some(says) => Some(says),
-        None if amount.dimension() == TEMPERATURE && !amount.is_difference => {
-            library_at(deck, spot, amount.si())
-        }
+        None if amount.dimension() == TEMPERATURE && !amount.is_difference => library_at(deck, spot, amount.si()),
         None => None,
     };
     if let Some(says) = says {
@@ -187,7 +187,9 @@ fn word_in_slot(deck: &Deck, spot: &Spot<'_>, word: &Expression, is_alone: bool,
             markdown.push_str(&format!("\n\n{}\n\nSource: {}", basis.remedy, basis.source));
             show(markdown)
         }
-        Some(Takes::Name(of)) if of != vocabulary::NameOf::Varied => hover_entity::entity(deck, of, text).and_then(show),
+        Some(Takes::Name(of)) if of != vocabulary::NameOf::Varied => {
+            hover_entity::entity(deck, of, text).and_then(show)
+        }
         Some(Takes::NewName) => {
             let of = crate::case::declare::named_kind(spot.row?.kind);
             match of {
@@ -260,3 +262,86 @@ fn member_of(deck: &Deck, spot: &Spot<'_>, owner: &Word, member: &Word) -> Optio
     Some(Hover { span: spot.placed(member.span), markdown })
 }
 
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::ide::testing::{DECK, at};
+
+    fn shown(marked: &str) -> String {
+        let (deck, offset) = at(marked);
+        hover(&deck, DECK, offset).map_or_else(String::new, |hover| hover.markdown)
+    }
+
+    fn says(marked: &str, parts: &[&str]) {
+        let markdown = shown(marked);
+        for part in parts {
+            assert!(markdown.contains(part), "no `{part}` in:\n{markdown}");
+        }
+    }
+
+    const FLUID: &str = "fluid room_water\n    substance water\n    reference 40 degC at 2 bar\n";
+
+    #[test]
+    fn a_quantity_in_other_units_and_by_the_library() {
+        // Outside: IAPWS R12-08 and IF97 at 40 degC, 2 bar give 0.6527 mPa.s.
+        says(
+            &format!("{FLUID}    viscosity 0.9 m$0Pa.s\n"),
+            &["0.9 mPa.s", "a dynamic viscosity", "0.0009 Pa.s", "0.9 cP", "water at 40 degC, 2 bar: 0.6527 mPa.s"],
+        );
+    }
+
+    #[test]
+    fn a_temperature_in_kelvin_with_the_properties_there() {
+        says(
+            "fluid f\n    substance air\n    reference 2$05 degC at 1 bar\n",
+            &["298.15 K", "77 degF", "a temperature", "air at 25 degC, 1 bar: ρ 1.1", "Pr 0.7"],
+        );
+        says("fluid f\n    reference -4$00 degC\n", &["**-40 degC**", "233.15 K", "-40 degF"]);
+    }
+
+    #[test]
+    fn a_difference_is_not_a_temperature() {
+        let markdown = shown("given\n    T = 20 degC + 5$0 K difference\n");
+        assert!(markdown.contains("a difference of temperatures") && markdown.contains("9 degR"), "{markdown}");
+        assert!(!markdown.contains("degC"), "{markdown}");
+    }
+
+    #[test]
+    fn a_name() {
+        let deck = "given\n    T_floor = 8 degC \"air of the floor\"\nboundary b of r\n    held at T_fl$0oor\n";
+        says(deck, &["**T_floor = 8 degC**", "air of the floor", "used once"]);
+        says("given\n    # the big one\n    a$0 = 2 * 1 m\n    b = a\n", &["**a = 2 m**", "the big one"]);
+        says(
+            "vary\n    T over 30 degC .. 80 degC step 10 K\nboundary b of r\n    held at T$0\n",
+            &["30 degC .. 80 degC, 6 values"],
+        );
+        says("given\n    a = p$0i\n", &["circumference"]);
+    }
+
+    #[test]
+    fn words_of_the_language() {
+        says("fluid f\n    dens$0ity-law boussinesq\n", &["density-law BOUSSINESQ / ".to_lowercase().as_str()]);
+        says("fluid f\n    density-law ideal$0-gas\n", &["ideal-gas law"]);
+        says("ru$0n\n    steady\n", &["How the case is run in time."]);
+        says("waive unkno$0wn-unit\n    because \"a\"\n", &["units", "BIPM"]);
+    }
+
+    #[test]
+    fn entries_by_name() {
+        says("# behind glass\nregion cab\n    box 1 m by 1 m\nboundary b of c$0ab\n", &["region cab", "behind glass"]);
+        says("fluid f\n    substance wa$0ter\n", &["IAPWS", "valid from 0 degC"]);
+        says(&format!("{FLUID}region r\n    filled with room_wa$0ter\n"), &["| μ | viscosity | 0.6527 mPa.s", "by the library"]);
+        says("region r\n    box 2 m by 1 m\ngiven\n    a = r.wid$0th\n", &["r.width = 2 m"]);
+    }
+
+    #[test]
+    fn at_every_place_of_a_broken_deck_nothing_breaks() {
+        let text = format!(
+            "{FLUID}    viscosity 1e999 mPa.s\n    density 5\nboundary é of (\n  held at -\"\nrequire\n  Ra(q < 5 ..\n"
+        );
+        let deck = crate::workspace::analyse_text(&text, crate::testing::TODAY);
+        for offset in 0..=text.len() + 2 {
+            hover(&deck, DECK, offset);
+        }
+    }
+}

@@ -4,7 +4,9 @@
 use super::library;
 use super::spot::Spot;
 use crate::case::bind::BoundEntry;
-use crate::case::model::{Case, Fluid, Region, Substance};
+use crate::case::model::{Case, DensityLaw, Fluid, Region, Substance};
+use crate::checks::Subject;
+use crate::checks::density_law::criteria::{Criterion, of_laws};
 use crate::physics::model::RegionPhysics;
 use crate::quantity::display::{format_difference, format_number, format_si};
 use crate::vocabulary::arrangements::ARRANGEMENTS;
@@ -68,7 +70,8 @@ fn statements(deck: &Deck, entry: &BoundEntry) -> String {
 
 fn region_lines(case: &Case, region: &Region, physics: &RegionPhysics) -> String {
     let mut lines: Vec<String> = Vec::new();
-    if let Some(word) = physics.arrangement.kind.word() {
+    let word = crate::report::numbers::word(physics.arrangement.kind);
+    if !word.is_empty() {
         let about = ARRANGEMENTS.iter().find(|choice| choice.word == word).map_or("", |choice| choice.description);
         lines.push(format!("{word}: {about}. {}", physics.arrangement.why));
     }
@@ -132,8 +135,11 @@ fn substance(substance: &Substance) -> String {
         markdown.push_str(&format!("  \n{}", substance.description));
     }
     if let Some((low, high)) = substance.valid {
-        markdown
-            .push_str(&format!("\n\nvalid from {} to {}", format_si(low, TEMPERATURE), format_si(high, TEMPERATURE)));
+        markdown.push_str(&format!(
+            "\n\nvalid from {} to {}",
+            format_si(low, TEMPERATURE),
+            format_si(high, TEMPERATURE)
+        ));
     }
     if let Some((least, most)) = substance.fraction {
         markdown.push_str(&format!(
@@ -150,7 +156,42 @@ fn substance(substance: &Substance) -> String {
     markdown
 }
 
-/// Every criterion of the Boussinesq law for the fluid at the spot, as a table.
-pub fn criteria(_deck: &Deck, _spot: &Spot<'_>) -> Option<String> {
-    None
+/// Every criterion of the Boussinesq law for the fluid at the spot, region by region, as a table. Under another law: what
+/// the Boussinesq law would meet.
+pub fn criteria(deck: &Deck, spot: &Spot<'_>) -> Option<String> {
+    let fluid = library::fluid_at(spot, &deck.case)?;
+    let law = fluid.density_law?.value;
+    // The day plays no part in a criterion.
+    let subject = Subject { case: &deck.case, physics: &deck.physics, today: "" };
+    let all = of_laws(&subject, &[law]);
+    let of_fluid: Vec<&Criterion> =
+        all.iter().filter(|one| *one.fluid == *fluid.name.text && one.value.is_finite()).collect();
+    let mut regions: Vec<&str> = of_fluid.iter().map(|one| one.region.as_str()).collect();
+    regions.dedup();
+    let mut markdown = String::new();
+    for region in regions {
+        let title = match law {
+            DensityLaw::Boussinesq => format!("The Boussinesq law in {region}"),
+            _ => format!("What the Boussinesq law would meet in {region}"),
+        };
+        markdown.push_str(&format!("\n\n{title}\n\n| | value | limit | margin left |\n|---|---|---|---|"));
+        for one in of_fluid.iter().filter(|one| one.region == region) {
+            markdown.push_str(&format!("\n{}", row(one)));
+        }
+    }
+    (!markdown.is_empty()).then_some(markdown)
+}
+
+fn row(one: &Criterion) -> String {
+    let limit = one.limits.first().map_or_else(String::new, |(_, limit)| format_number(*limit));
+    let margin = if one.margin_left.is_finite() {
+        format!("{} %", format_number((100.0 * one.margin_left).round()))
+    } else {
+        String::new()
+    };
+    let level = one.level.map_or_else(String::new, |level| format!(" **{}**", level.word()));
+    let band = one
+        .band
+        .map_or_else(String::new, |(least, most)| format!(" ({} .. {})", format_number(least), format_number(most)));
+    format!("| {} {} | {}{band}{level} | {limit} | {margin} |", one.check.name, one.symbol, format_number(one.value))
 }

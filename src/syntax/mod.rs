@@ -6,6 +6,7 @@ pub mod change;
 pub mod cut;
 pub mod expression;
 pub mod finding;
+pub mod layout;
 pub mod limits;
 pub mod links;
 pub mod parse;
