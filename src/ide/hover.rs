@@ -283,7 +283,7 @@ mod tests {
 
     #[test]
     fn a_quantity_in_other_units_and_by_the_library() {
-        // Outside: IAPWS R12-08 and IF97 at 40 degC, 2 bar give 0.6527 mPa.s.
+        // Outside: iapws 1.5.5 (IF97 with R12-08) gives 6.5274e-4 Pa.s at 313.15 K and 0.2 MPa.
         says(
             &format!("{FLUID}    viscosity 0.9 m$0Pa.s\n"),
             &["0.9 mPa.s", "a dynamic viscosity", "0.0009 Pa.s", "0.9 cP", "water at 40 degC, 2 bar: 0.6527 mPa.s"],
@@ -330,7 +330,10 @@ mod tests {
     fn entries_by_name() {
         says("# behind glass\nregion cab\n    box 1 m by 1 m\nboundary b of c$0ab\n", &["region cab", "behind glass"]);
         says("fluid f\n    substance wa$0ter\n", &["IAPWS", "valid from 0 degC"]);
-        says(&format!("{FLUID}region r\n    filled with room_wa$0ter\n"), &["| μ | viscosity | 0.6527 mPa.s", "by the library"]);
+        says(
+            &format!("{FLUID}region r\n    filled with room_wa$0ter\n"),
+            &["| μ | viscosity | 0.6527 mPa.s", "by the library"],
+        );
         says("region r\n    box 2 m by 1 m\ngiven\n    a = r.wid$0th\n", &["r.width = 2 m"]);
     }
 

@@ -95,16 +95,10 @@ fn is_empty(line: &Line) -> bool {
 
 /// The change without the text that stays at its two ends, so that a cursor there is not moved.
 fn smallest(span: Span, old: &str, new: String) -> (Span, String) {
-    let before: usize =
-        old.chars().zip(new.chars()).take_while(|(a, b)| a == b).map(|(a, _)| a.len_utf8()).sum();
+    let before: usize = old.chars().zip(new.chars()).take_while(|(a, b)| a == b).map(|(a, _)| a.len_utf8()).sum();
     let (old_rest, new_rest) = (old.get(before..).unwrap_or(""), new.get(before..).unwrap_or(""));
-    let behind: usize = old_rest
-        .chars()
-        .rev()
-        .zip(new_rest.chars().rev())
-        .take_while(|(a, b)| a == b)
-        .map(|(a, _)| a.len_utf8())
-        .sum();
+    let behind: usize =
+        old_rest.chars().rev().zip(new_rest.chars().rev()).take_while(|(a, b)| a == b).map(|(a, _)| a.len_utf8()).sum();
     let kept = new_rest.get(..new_rest.len() - behind).unwrap_or("").to_string();
     (Span::new(span.start + before, span.end - behind), kept)
 }
@@ -261,7 +255,10 @@ fn parts(entry: &Entry, phrase: &Phrase) -> Parts {
     if reads_on || !key.ends_with(is_gap) {
         return all();
     }
-    Parts::Aligned(gathered(key.trim_end_matches(is_gap)), gathered(Span::new(first.span.start, phrase.span.end).of(text)))
+    Parts::Aligned(
+        gathered(key.trim_end_matches(is_gap)),
+        gathered(Span::new(first.span.start, phrase.span.end).of(text)),
+    )
 }
 
 fn padded(text: &str, width: usize) -> String {

@@ -69,7 +69,9 @@ fn the_sample_of_the_language_stands_as_it_is_and_comes_back_when_squeezed() {
 #[test]
 fn comments_and_empty_lines() {
     assert_eq!(
-        laid_out("# top\n\n\n# of run\nrun   # why\n\n\n  # note\n  steady # a\n  time-stepping implicit # b\nmesh of a\n  growth 1.2\n\n\n"),
+        laid_out(
+            "# top\n\n\n# of run\nrun   # why\n\n\n  # note\n  steady # a\n  time-stepping implicit # b\nmesh of a\n  growth 1.2\n\n\n"
+        ),
         "# top\n\n\n# of run\nrun  # why\n\n    # note\n    steady                   # a\n    time-stepping  implicit  # b\n\nmesh of a\n    growth         1.2\n"
     );
 }
@@ -77,7 +79,9 @@ fn comments_and_empty_lines() {
 #[test]
 fn rows_and_definitions_beside_statements() {
     assert_eq!(
-        laid_out("substance oil\n a = 2\n density a * 1 kg/m^3\n table temperature, viscosity\n |20 degC|0.8 Pa.s|\n | 100 degC | 0.02 Pa.s |\n"),
+        laid_out(
+            "substance oil\n a = 2\n density a * 1 kg/m^3\n table temperature, viscosity\n |20 degC|0.8 Pa.s|\n | 100 degC | 0.02 Pa.s |\n"
+        ),
         "substance oil\n    a            = 2\n    density        a * 1 kg/m^3\n    table          temperature, viscosity\n    | 20 degC  | 0.8 Pa.s  |\n    | 100 degC | 0.02 Pa.s |\n"
     );
 }
@@ -116,11 +120,67 @@ impl Random {
 #[test]
 fn for_any_text_only_white_space_changes() {
     const PIECES: &[&str] = &[
-        "region", "boundary", "given", "substance", "a", "b_c", " ", "  ", "\t", "\u{a0}", "\n", "\n    ", "\n  ", "\r\n",
-        "\n\n", "# note", "#", "\"text  two\"", "\"", "5", "1e3", "5 m", "5m", "20 degC", "-", " - ", "*", "/", " / ", "(",
-        ")", "[1 m,2 m]", ",", "=", " = ", "|", "| 1 m | 2 |", "<", "within", " .. ", "of", "by", "at", "held at",
-        "because", "until", "2027-03-01", "box 1 m by 2 m", "density-law", "boussinesq", "+-", "é", "高", "\u{feff}", "Ra(a)",
-        "require", "waive", "table", "f(x)", "x.y", "difference",
+        "region",
+        "boundary",
+        "given",
+        "substance",
+        "a",
+        "b_c",
+        " ",
+        "  ",
+        "\t",
+        "\u{a0}",
+        "\n",
+        "\n    ",
+        "\n  ",
+        "\r\n",
+        "\n\n",
+        "# note",
+        "#",
+        "\"text  two\"",
+        "\"",
+        "5",
+        "1e3",
+        "5 m",
+        "5m",
+        "20 degC",
+        "-",
+        " - ",
+        "*",
+        "/",
+        " / ",
+        "(",
+        ")",
+        "[1 m,2 m]",
+        ",",
+        "=",
+        " = ",
+        "|",
+        "| 1 m | 2 |",
+        "<",
+        "within",
+        " .. ",
+        "of",
+        "by",
+        "at",
+        "held at",
+        "because",
+        "until",
+        "2027-03-01",
+        "box 1 m by 2 m",
+        "density-law",
+        "boussinesq",
+        "+-",
+        "é",
+        "高",
+        "\u{feff}",
+        "Ra(a)",
+        "require",
+        "waive",
+        "table",
+        "f(x)",
+        "x.y",
+        "difference",
     ];
     let mut random = Random(0x9E37_79B9_7F4A_7C15);
     for _ in 0..4000 {
