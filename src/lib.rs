@@ -6,6 +6,7 @@
 pub mod case;
 pub mod checks;
 pub mod command;
+pub mod ide;
 pub mod physics;
 pub mod quantity;
 pub mod report;
