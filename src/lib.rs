@@ -6,9 +6,11 @@
 pub mod case;
 pub mod checks;
 pub mod command;
+pub mod ide;
 pub mod physics;
 pub mod quantity;
 pub mod report;
+pub mod server;
 pub mod substances;
 pub mod syntax;
 #[doc(hidden)]

@@ -6,6 +6,7 @@ pub mod begin;
 pub mod manual;
 pub mod numbers;
 pub mod quantity;
+pub mod serve;
 pub mod substances;
 pub mod terminal;
 pub mod vocabulary;
@@ -52,6 +53,8 @@ pub enum Command {
     Substances(substances::Arguments),
     /// Print what a word of the language means, or the list of the words
     Vocabulary(vocabulary::Arguments),
+    /// Serve an editor: the language server, on standard input and output
+    Serve,
     /// Write a small working case folder to start from
     Begin(begin::Arguments),
     /// Print the completions of a shell
@@ -77,6 +80,7 @@ pub fn run() -> ExitCode {
         Command::Basis(arguments) => basis::run(&arguments),
         Command::Substances(arguments) => substances::run(&arguments),
         Command::Vocabulary(arguments) => vocabulary::run(&arguments),
+        Command::Serve => serve::run(),
         Command::Begin(arguments) => begin::run(&arguments),
         Command::Completions(arguments) => manual::completions(&arguments),
         Command::Manual => manual::page(),

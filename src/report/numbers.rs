@@ -318,7 +318,7 @@ fn margin_left(finding: &Finding) -> Option<MarginLeft> {
 }
 
 /// The arrangement's word in the language; empty for none.
-fn word(kind: ArrangementKind) -> &'static str {
+pub fn word(kind: ArrangementKind) -> &'static str {
     match kind {
         ArrangementKind::SideHeatedCavity => "side-heated-cavity",
         ArrangementKind::LayerHeatedFromBelow => "layer-heated-from-below",

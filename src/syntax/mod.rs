@@ -2,10 +2,13 @@
 //!
 //! Parsing never fails. It gives a tree that covers every byte and notes what it could not read.
 
+pub mod change;
 pub mod cut;
 pub mod expression;
 pub mod finding;
+pub mod layout;
 pub mod limits;
+pub mod links;
 pub mod parse;
 pub mod span;
 pub mod tokens;

@@ -3,6 +3,7 @@
 pub mod analyse;
 pub mod deck;
 pub mod includes;
+pub mod overlay;
 pub mod practice;
 pub mod read;
 pub mod sweep;
