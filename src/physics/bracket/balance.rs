@@ -177,3 +177,64 @@ pub fn steady<'a>(question: &Question<'a>, sizes: &Sizes) -> Option<Found<'a>> {
     network.fill(&mut found, settled.bulk, settled.band);
     Some(found)
 }
+
+#[cfg(test)]
+mod tests {
+    use crate::testing::physics;
+
+    fn boxed(boundaries: &str) -> crate::physics::model::RegionPhysics {
+        physics(&format!(
+            "fluid f\n    substance air\n    reference 20 degC\nregion r\n    box 1 m by 1 m by 1 m\n    filled with f\n{boundaries}run\n    steady\n"
+        ))
+        .remove(0)
+    }
+
+    #[test]
+    fn walls_lose_what_a_source_releases() {
+        let boxed = boxed(
+            "boundary skin of r\n    side remaining\n    wall\n    exchanges 5 W/m^2/K with 20 degC\n\
+             source s in r\n    releases 200 W\n",
+        );
+        let bracket = boxed.bracket.unwrap();
+        // Six faces of 1 m² lose 200 W: on average 6.7 K above the air outside.
+        let mean = 293.15 + 200.0 / 30.0;
+        assert!(bracket.lowest.value < mean && mean < bracket.highest.value, "{bracket:?}");
+        assert_eq!(bracket.highest.set_by, "the fluid of r by its heat balance");
+        // Inside coefficients of plates at some kelvins in air are 1 to 4 W/(m² K): the fluid is 8 to 35 K above the walls.
+        let above = bracket.highest.value - mean;
+        assert!((200.0 / 6.0 / 4.0..200.0 / 6.0).contains(&above), "{above}");
+        assert!(bracket.highest.band.0 < bracket.highest.value && bracket.highest.band.1 > bracket.highest.value);
+    }
+
+    #[test]
+    fn one_outer_coefficient_without_end_is_a_held_wall() {
+        let source = "source s in r\n    releases 200 W\n";
+        let held = boxed(&format!("boundary skin of r\n    side remaining\n    wall\n    held at 20 degC\n{source}"));
+        let exchanging =
+            boxed(&format!("boundary skin of r\n    side remaining\n    wall\n    exchanges 1e7 W/m^2/K with 20 degC\n{source}"));
+        let (held, exchanging) = (held.bracket.unwrap(), exchanging.bracket.unwrap());
+        assert!((held.highest.value - exchanging.highest.value).abs() < 0.01, "{held:?} {exchanging:?}");
+    }
+
+    #[test]
+    fn a_steady_space_without_a_level_has_no_bracket() {
+        let floating = boxed(
+            "boundary skin of r\n    side remaining\n    wall\n    insulated\nsource s in r\n    releases 200 W\n\
+             initial r\n    temperature 20 degC\n",
+        );
+        assert!(floating.bracket.is_none());
+        assert!(floating.numbers.rayleigh.is_nan());
+    }
+
+    #[test]
+    fn a_heated_patch_stands_above_the_fluid() {
+        let patched = boxed(
+            "boundary heater of r\n    side west\n    patch 0.3 m by 0.3 m\n    wall\n    heated by 40 W\n\
+             boundary skin of r\n    side remaining\n    wall\n    exchanges 5 W/m^2/K with 20 degC\n",
+        );
+        let bracket = patched.bracket.unwrap();
+        assert_eq!(bracket.highest.set_by, "boundary heater by its power");
+        // 444 W/m² at 4 to 8 W/(m² K).
+        assert!((50.0..115.0).contains(&(bracket.highest.value - bracket.lowest.value)), "{bracket:?}");
+    }
+}

@@ -154,3 +154,62 @@ fn solve(
     let chosen = chosen(hot_temperature - cold_temperature)?;
     (hot_temperature.is_finite() && cold_temperature.is_finite()).then_some((hot_temperature, cold_temperature, chosen))
 }
+
+#[cfg(test)]
+mod tests {
+    use crate::testing::physics;
+
+    fn cavity(hot: &str, cold: &str, run: &str) -> crate::physics::model::RegionPhysics {
+        physics(&format!(
+            "fluid f\n    substance air\n    reference 20 degC\nregion r\n    box 0.1 m by 1 m by 0.8 m\n    filled with f\n\
+             boundary hot of r\n    side west\n    wall\n    {hot}\nboundary cold of r\n    side east\n    wall\n    {cold}\n\
+             boundary rest of r\n    side remaining\n    wall\n    insulated\nrun\n    {run}\n"
+        ))
+        .remove(0)
+    }
+
+    #[test]
+    fn one_heat_passes_every_resistance() {
+        let cavity = cavity("exchanges 8 W/m^2/K with 60 degC", "exchanges 20 W/m^2/K with -10 degC", "steady");
+        let bracket = cavity.bracket.unwrap();
+        let (hot, cold) = (bracket.highest.value, bracket.lowest.value);
+        let from_hot = 8.0 * (333.15 - hot);
+        let to_cold = 20.0 * (cold - 263.15);
+        let between = cavity.numbers.heat_transfer_coefficient * (hot - cold);
+        assert!((from_hot / to_cold - 1.0).abs() < 1e-4, "{from_hot} {to_cold}");
+        assert!((from_hot / between - 1.0).abs() < 2e-3, "{from_hot} {between}");
+        assert!(bracket.highest.estimate.unwrap().contains("Berkovsky and Polevikov"));
+    }
+
+    #[test]
+    fn a_flux_sets_the_difference_from_the_cold_side() {
+        let cavity = cavity("heated by 100 W/m^2", "exchanges 10 W/m^2/K with 20 degC", "steady");
+        let bracket = cavity.bracket.unwrap();
+        assert!((bracket.lowest.value - 303.15).abs() < 1e-6, "{bracket:?}");
+        assert_eq!(bracket.lowest.band, (bracket.lowest.value, bracket.lowest.value));
+        let passing = cavity.numbers.heat_transfer_coefficient * cavity.numbers.difference;
+        assert!((passing / 100.0 - 1.0).abs() < 2e-3, "{passing}");
+    }
+
+    #[test]
+    fn a_cooling_flux_below_a_held_side() {
+        let cavity = cavity("held at 40 degC", "cooled by 50 W/m^2", "steady");
+        let bracket = cavity.bracket.unwrap();
+        assert!((bracket.highest.value - 313.15).abs() < 1e-9 && bracket.highest.estimate.is_none());
+        let passing = cavity.numbers.heat_transfer_coefficient * cavity.numbers.difference;
+        assert!((passing / 50.0 - 1.0).abs() < 2e-3, "{passing}");
+    }
+
+    #[test]
+    fn two_fluxes_leave_the_level_open() {
+        assert!(cavity("heated by 50 W/m^2", "cooled by 50 W/m^2", "steady").bracket.is_none());
+    }
+
+    #[test]
+    fn a_cold_side_that_radiates() {
+        let cavity = cavity("heated by 100 W/m^2", "radiates to 0 degC\n    emissivity 0.5", "steady");
+        let cold = cavity.bracket.unwrap().lowest.value;
+        let lost = 0.5 * 5.670_374_419e-8 * (cold.powi(4) - 273.15_f64.powi(4));
+        assert!((lost / 100.0 - 1.0).abs() < 1e-6, "{lost}");
+    }
+}

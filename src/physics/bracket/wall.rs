@@ -127,3 +127,81 @@ fn rise(fluid: &Transport, gravity: f64, surface: Surface, flux: f64, edge: Edge
     let root = root::near(guess, 0.1, (-40.0, 14.0), 1e-9, residual)?;
     Some(root.at.exp() * flux.signum())
 }
+
+#[cfg(test)]
+mod tests {
+    use crate::testing::physics;
+
+    fn plate(substance: &str, heat: &str, far: &str) -> crate::physics::model::RegionPhysics {
+        physics(&format!(
+            "case \"t\"\n    gravity 9.80665 m/s^2\nfluid f\n    substance {substance}\n    reference {far}\nregion r\n    \
+             plate 0.5 m by 0.4 m\n    filled with f\nboundary face of r\n    side face\n    wall\n    {heat}\n\
+             boundary away of r\n    side far\n    opening\n    backflow {far}\n"
+        ))
+        .remove(0)
+    }
+
+    #[test]
+    fn the_heat_given_is_the_heat_that_passes() {
+        for (substance, heat, flux) in [
+            ("air", "heated by 300 W/m^2", 300.0),
+            ("air", "heated by 60 W", 300.0),
+            ("water", "heated by 2 W/cm^2", 2e4),
+            ("engine_oil", "heated by 2000 W/m^2", 2e3),
+            ("mercury", "heated by 1e4 W/m^2", 1e4),
+            ("air", "cooled by 50 W/m^2", 50.0),
+        ] {
+            let plate = plate(substance, heat, "20 degC");
+            let numbers = &plate.numbers;
+            // Properties of the numbers are those at mid-span, which counts by the top of the plate.
+            let passing = numbers.heat_transfer_coefficient * numbers.difference;
+            assert!((passing / flux - 1.0).abs() < 0.02, "{substance} {heat}: {passing}, not {flux}");
+            let bracket = plate.bracket.unwrap();
+            let end = if heat.starts_with('c') { &bracket.lowest } else { &bracket.highest };
+            let estimate = end.estimate.as_ref().unwrap();
+            assert!(!estimate.contains("converge"), "{estimate}");
+            assert!(end.band.0 < end.value && end.value < end.band.1, "{end:?}");
+            assert!(end.set_by == if heat.ends_with(" W") { "boundary face by its power" } else { "boundary face by its flux" });
+        }
+    }
+
+    #[test]
+    fn the_top_of_a_laminar_plate_is_hotter() {
+        let plate = plate("air", "heated by 100 W/m^2", "20 degC");
+        assert!(plate.numbers.rayleigh < 1e9);
+        let rise = plate.bracket.unwrap().span();
+        // Sparrow and Gregg 1956: 2^(1/5).
+        assert!((rise / plate.numbers.difference - 1.1487).abs() < 1e-3, "{rise} {}", plate.numbers.difference);
+    }
+
+    #[test]
+    fn a_band_is_the_published_scatter() {
+        // Churchill and Chu, 20 %: a flux fixed, the difference goes as h^(-1) at a power between 1/4 and 1/3.
+        let bracket = plate("air", "heated by 300 W/m^2", "20 degC").bracket.unwrap();
+        let far = bracket.lowest.value;
+        let (low, high) = bracket.highest.band;
+        let ratio = |value: f64| (value - far) / (bracket.highest.value - far);
+        assert!((0.8_f64.powf(-0.81)..0.8_f64.powf(-0.74)).contains(&ratio(high)), "{}", ratio(high));
+        assert!((1.2_f64.powf(-0.81)..1.2_f64.powf(-0.74)).contains(&ratio(low)), "{}", ratio(low));
+    }
+
+    #[test]
+    fn losses_behind_a_wall_count() {
+        let plain = plate("air", "heated by 300 W/m^2", "20 degC").bracket.unwrap();
+        let losing = plate("air", "heated by 300 W/m^2\n    radiates to 20 degC\n    emissivity 0.9", "20 degC").bracket.unwrap();
+        let warmed = plate("air", "exchanges 10 W/m^2/K with 90 degC", "20 degC").bracket.unwrap();
+        assert!(losing.highest.value < plain.highest.value - 10.0, "{losing:?}");
+        assert!((293.15..363.15).contains(&warmed.highest.value), "{warmed:?}");
+        assert_eq!(warmed.highest.set_by, "boundary face by the heat that passes through it");
+    }
+
+    #[test]
+    fn past_the_data_the_estimate_says_so() {
+        let far_out = plate("water", "heated by 1e6 W/m^2", "20 degC").bracket.unwrap();
+        let text = far_out.highest.estimate.unwrap();
+        assert!(text.contains("outside the range") || far_out.highest.value < 600.0, "{text}");
+        let furnace = plate("air", "heated by 1e5 W/m^2", "20 degC").bracket.unwrap();
+        assert!(furnace.highest.value.is_finite());
+        assert!(furnace.highest.estimate.unwrap().contains("which is outside the range of the substance's data"));
+    }
+}
