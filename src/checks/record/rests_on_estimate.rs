@@ -12,8 +12,7 @@ pub const CHECK: Check = Check {
     limits: &[],
     level: Level::Hint,
     basis: Basis {
-        compares: "Says which ends of the temperatures of a region are estimated, by what, and with which band. Outside the published range \
-                   of the correlation it is an information.",
+        compares: "Says which ends of the temperatures of a region are estimated, by what, and with which band.",
         formula: "",
         source: "the correlation or balance that the finding names",
         remedy: "Hold the estimate against a measurement or a finer method where a verdict depends on it.",
@@ -32,14 +31,10 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         }
         let numbers = &physics.numbers;
         let is_outside = numbers.nusselt.is_finite() && !numbers.nusselt_inside_range;
-        let (level, note) = if is_outside {
-            (Level::Information.max(weighing.level), " The correlation is used outside its published range.")
-        } else {
-            (weighing.level, "")
-        };
-        let message = format!("In `{}` {}.{note}", region.name.text, parts.join(", and "));
+        let note = if is_outside { " The correlation of the region is used outside its published range." } else { "" };
+        let message = format!("In `{}` {}.{note}", region.name.text, parts.join("; "));
         findings.push(
-            finding_of(CHECK.name, level, &region.name, message)
+            finding_of(CHECK.name, weighing.level, &region.name, message)
                 .remedy("hold it against a measurement or a finer method where a verdict depends on it"),
         );
     }
@@ -53,7 +48,7 @@ fn in_words(which: &str, bound: &Bound) -> Option<String> {
         return None;
     }
     Some(format!(
-        "the {which} temperature is estimated: {} ({} to {}), {}, by {by}",
+        "the {which} temperature is an estimate, {} ({} to {}): {}; {by}",
         celsius(bound.value),
         celsius(low),
         celsius(high),

@@ -1,7 +1,7 @@
 //! `stable-layer`: heat from above, which moves nothing.
 
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
-use crate::checks::look::{celsius, estimate_note, finding_of, gravity_acts, regions};
+use crate::checks::look::{celsius, estimate_note, finding_of, gravity_acts, has_density_maximum, regions};
 use crate::physics::model::ArrangementKind;
 use crate::syntax::{Finding, Level};
 
@@ -27,7 +27,9 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     let mut findings = Vec::new();
     for (region, physics) in regions(subject) {
-        if physics.arrangement.kind != ArrangementKind::StableLayer || region.arrangement.is_some() {
+        let is_stable = physics.arrangement.kind == ArrangementKind::StableLayer;
+        let is_meant = region.arrangement.is_some();
+        if !is_stable || is_meant || has_density_maximum(subject.case, region, physics) {
             continue;
         }
         let ends =

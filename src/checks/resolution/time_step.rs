@@ -3,7 +3,7 @@
 use super::cells::{first_cell, heated_directions, mesh_of, rows, upright};
 use crate::case::model::{Flow, Region, Value};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
-use crate::checks::look::{Weighed, estimate_note, regions};
+use crate::checks::look::{Weighed, estimate_note, regions, rounded_down};
 use crate::physics::model::RegionPhysics;
 use crate::quantity::display::{format_number, format_si};
 use crate::syntax::{Finding, Level};
@@ -93,7 +93,7 @@ fn courant(
     Some(
         Finding::new(CHECK.name, level, step.origin.place, message)
             .about(&*region.name.text)
-            .remedy(format!("a step of {} or less", format_si(step.si / ratio.value * limit, TIME)))
+            .remedy(format!("a step of {} or less", format_si(rounded_down(step.si / ratio.value * limit), TIME)))
             .weighing(ratio.margin("Co / Co_limit", limit)),
     )
 }
@@ -129,7 +129,7 @@ fn diffusion(
             .about(&*region.name.text)
             .remedy(format!(
                 "a step of {} or less, or `time-stepping implicit`",
-                format_si(step.si / ratio.value * limit, TIME)
+                format_si(rounded_down(step.si / ratio.value * limit), TIME)
             ))
             .weighing(ratio.margin("Fo / 0.5", limit)),
     )

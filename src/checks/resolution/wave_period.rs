@@ -1,7 +1,7 @@
 //! `wave-period`: a step too long for the waves of a stratified fluid.
 
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
-use crate::checks::look::{Weighed, estimate_note, regions};
+use crate::checks::look::{Weighed, estimate_note, regions, rounded_down};
 use crate::quantity::display::{format_number, format_si};
 use crate::syntax::{Finding, Level};
 use crate::vocabulary::statements::TIME;
@@ -41,7 +41,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         findings.push(
             Finding::new(CHECK.name, level, step.origin.place, message)
                 .about(&*region.name.text)
-                .remedy(format!("a step of {} or less", format_si(period * weighing.first_limit(), TIME)))
+                .remedy(format!("a step of {} or less", format_si(rounded_down(period * weighing.first_limit()), TIME)))
                 .weighing(share.margin("Δt N / (2π)", limit)),
         );
     }
