@@ -55,3 +55,61 @@ fn in_words(which: &str, bound: &Bound) -> Option<String> {
         bound.set_by
     ))
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn a_flux() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c  #! rests-on-estimate "the highest temperature is an estimate"
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    heated by 20 W/m^2
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn given_ends() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+}

@@ -106,8 +106,143 @@ fn first_for(layer: f64, growth: f64, cells: f64) -> f64 {
 }
 
 #[cfg(test)]
-mod unit_tests {
-    use super::{cells_within, first_for, rounded_down};
+mod tests {
+    use super::{CHECK, cells_within, first_for, rounded_down};
+    use crate::testing::expect_of;
+
+    #[test]
+    fn two_cells_or_four() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 2.5 mm  #! boundary-layer-cells "2 cells lie in it"
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 1.4 mm
+"##,
+        );
+    }
+
+    #[test]
+    fn from_the_number_of_cells() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c  #! boundary-layer-cells
+    cells 100 by 300
+    spacing uniform
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    cells 300 by 100
+    spacing uniform
+"##,
+        );
+    }
+
+    #[test]
+    fn wall_functions_bridge_it() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          2 m by 2 m
+    filled with  a
+    flow         turbulent by k-epsilon
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 40 mm
+"##,
+        );
+    }
 
     #[test]
     fn what_is_advised_is_enough() {

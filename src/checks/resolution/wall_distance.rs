@@ -107,3 +107,141 @@ fn one_digit(value: f64) -> String {
     let step = 10_f64.powf(value.log10().floor());
     format_number((value / step).round() * step)
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn carried_to_the_wall() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         turbulent by k-omega
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 12 mm  #! wall-distance "takes 1 or less"
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         turbulent by k-omega
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 1 mm
+"##,
+        );
+    }
+
+    #[test]
+    fn wall_functions() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          3 m by 3 m
+    filled with  a
+    flow         turbulent by k-epsilon
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 2 mm  #! wall-distance "between 30 and 300"
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          3 m by 3 m
+    filled with  a
+    flow         turbulent by k-epsilon
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 50 mm
+"##,
+        );
+    }
+
+    #[test]
+    fn without_a_model() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 12 mm
+"##,
+        );
+    }
+}

@@ -47,3 +47,65 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn steps_in_a_period() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    water
+    reference    20 degC at 1 atm
+    density-law  variable
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 25.1 degC
+boundary cold of c
+    side east
+    held at 24.9 degC
+boundary rest of c
+    side remaining
+    insulated
+initial c
+    stratified from 20 degC to 30 degC
+run
+    transient for 1 h step 1 s
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    water
+    reference    20 degC at 1 atm
+    density-law  variable
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 25.1 degC
+boundary cold of c
+    side east
+    held at 24.9 degC
+boundary rest of c
+    side remaining
+    insulated
+initial c
+    stratified from 20 degC to 30 degC
+run
+    transient for 1 h step 5 s  #! wave-period
+"##,
+        );
+    }
+}
