@@ -4,6 +4,7 @@ use super::check::{Subject, Weighing};
 use crate::case::model::{Boundary, Case, Name, Region};
 use crate::physics::model::{Bracket, RegionPhysics};
 use crate::quantity::display::format_si;
+use crate::substances::Medium;
 use crate::syntax::{Finding, Level, Margin};
 use crate::vocabulary::statements::TEMPERATURE;
 
@@ -26,6 +27,20 @@ pub fn is_fluid(region: &Region) -> bool {
 /// Whether gravity acts. Unknown gravity does not count.
 pub fn gravity_acts(case: &Case) -> bool {
     case.gravity.magnitude > 0.0
+}
+
+/// Whether the density of a region's fluid has a maximum between the temperatures that it reaches (water near 4 degC). Then
+/// a part of a layer is stable and a part is not, and one Rayleigh number does not tell.
+pub fn has_density_maximum(case: &Case, region: &Region, physics: &RegionPhysics) -> bool {
+    let change = || {
+        let fluid = case.fluid_of(region)?;
+        let medium = Medium::of(case, fluid)?;
+        let (bracket, pressure) = (physics.bracket.as_ref()?, physics.fluid.as_ref()?.pressure);
+        let low = medium.expansion(bracket.lowest.value, pressure)?;
+        let high = medium.expansion(bracket.highest.value, pressure)?;
+        Some(low * high <= 0.0)
+    };
+    change().unwrap_or(false)
 }
 
 /// Whether the run seeks a steady state.
@@ -122,6 +137,13 @@ pub fn named(name: &Name) -> String {
     format!("`{}`", name.text)
 }
 
+/// A size down to two digits, so that what is advised is enough.
+pub fn rounded_down(size: f64) -> f64 {
+    let step = 10_f64.powf(size.log10().floor() - 1.0);
+    // What is whole already stays so in spite of rounding.
+    (size / step * (1.0 + 1e-12)).floor() * step
+}
+
 /// Names as a sentence has them: "`a`, `b` and `c`".
 pub fn listed(names: &[&str]) -> String {
     let quoted: Vec<String> = names.iter().map(|name| format!("`{name}`")).collect();
@@ -181,6 +203,13 @@ mod tests {
         assert_eq!(sentence("the lid reaches 93 degC"), "The lid reaches 93 degC.");
         assert_eq!(sentence("αΔT is 0.15"), "αΔT is 0.15.");
         assert_eq!(sentence(""), "");
+    }
+
+    #[test]
+    fn advice_is_on_the_safe_side() {
+        assert!((rounded_down(0.002_69) - 0.0026).abs() < 1e-12);
+        assert!((rounded_down(1.8) - 1.8).abs() < 1e-9);
+        assert!(rounded_down(f64::NAN).is_nan());
     }
 
     #[test]

@@ -122,3 +122,144 @@ fn emissivity_of(case: &Case, boundary: &Boundary) -> Option<f64> {
     let value = boundary.emissivity.as_ref().or_else(behind)?.si;
     (value > 0.0 && value <= 1.0).then_some(value)
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn bright_and_dark_faces() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c  #! radiation-neglected
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+    emissivity 0.9
+boundary cold of c
+    side east
+    held at 10 degC
+    emissivity 0.9
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+    emissivity 0.03
+boundary cold of c
+    side east
+    held at 10 degC
+    emissivity 0.03
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn computed() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+    radiation surface-to-surface
+boundary hot of c
+    side west
+    held at 30 degC
+    emissivity 0.9
+boundary cold of c
+    side east
+    held at 10 degC
+    emissivity 0.9
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn a_hint_where_no_surface_says() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c  #! radiation-neglected "taken as no surface states one"
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn liquids_are_opaque() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    water
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+    emissivity 0.9
+boundary cold of c
+    side east
+    held at 10 degC
+    emissivity 0.9
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+}
