@@ -176,11 +176,12 @@ fn laid_line(entry: &Entry, index: usize, line: &Line, columns: &Columns) -> Opt
     let whole = line.span.of(&entry.text);
     let comment = line.comment.map(|span| span.of(&entry.text).trim_end());
     let is_head = entry.head == Some(index);
+    // A byte-order mark stays where it is.
+    let unmarked = whole.trim_start_matches('\u{feff}');
+    let mark = whole.get(..whole.len() - unmarked.len()).unwrap_or("");
     if line.content == Content::Blank {
         // A comment in the first column stays there: it may describe the entry below it.
-        let stays = whole.trim_start_matches('\u{feff}').starts_with('#');
-        let mark = if whole.starts_with('\u{feff}') { "\u{feff}" } else { "" };
-        let indent = if stays { 0 } else { INDENT };
+        let indent = if unmarked.starts_with('#') { 0 } else { INDENT };
         return Some(match comment {
             Some(comment) => format!("{mark}{}{comment}", " ".repeat(indent)),
             None => mark.to_string(),
@@ -188,10 +189,9 @@ fn laid_line(entry: &Entry, index: usize, line: &Line, columns: &Columns) -> Opt
     }
     let (mut laid, comment_column) = if is_head {
         let Content::Phrase(phrase) = &line.content else { return None };
-        let mark = if whole.starts_with('\u{feff}') { "\u{feff}" } else { "" };
         (format!("{mark}{}", gathered(phrase.span.of(&entry.text))), 0)
     } else {
-        (format!("{}{}", " ".repeat(INDENT), content(entry, line, columns)?), INDENT + columns.comment)
+        (format!("{mark}{}{}", " ".repeat(INDENT), content(entry, line, columns)?), INDENT + columns.comment)
     };
     if let Some(comment) = comment {
         let width = laid.trim_start_matches('\u{feff}').width();

@@ -1,10 +1,8 @@
 //! The links: words that label arguments, and so name nothing else.
 
 /// Every link, as the grammar has them.
-pub const LINKS: [&str; 15] = [
-    "along", "and", "at", "because", "by", "for", "from", "in", "of", "over", "step", "to", "until", "with",
-    "within",
-];
+pub const LINKS: [&str; 15] =
+    ["along", "and", "at", "because", "by", "for", "from", "in", "of", "over", "step", "to", "until", "with", "within"];
 
 /// Whether a word is a link.
 pub fn is_link(word: &str) -> bool {
