@@ -116,7 +116,7 @@ mod tests {
 
     #[test]
     fn a_remedy_under_the_cursor_and_all_sure_ones() {
-        let (deck, offset) = at("given\n    a = 3 Mp$0a\n    b = 2*a\nregion r\n    bx 1 m by 1 m\n");
+        let (deck, offset) = at("given\n    a = 3 Mp$0a\n    b = 2*a\nregion r\n    boxx 1 m by 1 m\n");
         let all = actions(&deck, DECK, Span::new(offset, offset));
         let fix = all.iter().find(|action| action.kind == ActionKind::QuickFix).unwrap();
         assert_eq!((fix.title.as_str(), fix.resolves, fix.sure), ("Write `MPa`", Some("unknown-unit"), true));
