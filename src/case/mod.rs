@@ -7,6 +7,7 @@ pub mod build;
 pub mod compiled;
 pub mod declare;
 pub mod expression;
+pub mod index;
 pub mod kinds;
 pub mod model;
 pub mod names;

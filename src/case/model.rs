@@ -4,9 +4,11 @@
 //! is `NaN` too, and no check speaks of it.
 
 use super::compiled::Compiled;
+use super::index::Index;
 use crate::quantity::Dimension;
 use crate::syntax::tree::{Comparison, Expression};
 use crate::syntax::{FileId, Level, Place};
+use std::sync::OnceLock;
 
 /// A value in SI and where it stands in the deck.
 #[derive(Clone, Debug, PartialEq)]
@@ -94,6 +96,8 @@ pub struct Case {
     pub waivers: Vec<Waiver>,
     /// House rules in force.
     pub practice: Practice,
+    /// Where names are; made when first asked for.
+    pub index: OnceLock<Index>,
 }
 
 /// A defined name and its value.
@@ -599,12 +603,12 @@ impl Value {
 impl Case {
     /// The region of a name.
     pub fn region(&self, name: &str) -> Option<&Region> {
-        self.regions.iter().find(|region| &*region.name.text == name)
+        self.regions.get(self.index().region(self, name)?)
     }
 
     /// The fluid of a name.
     pub fn fluid(&self, name: &str) -> Option<&Fluid> {
-        self.fluids.iter().find(|fluid| &*fluid.name.text == name)
+        self.fluids.get(self.index().fluid(self, name)?)
     }
 
     /// The fluid in or around a region.
@@ -614,6 +618,14 @@ impl Case {
 
     /// The boundaries of a region.
     pub fn boundaries_of<'a>(&'a self, region: &'a Region) -> impl Iterator<Item = &'a Boundary> + 'a {
-        self.boundaries.iter().filter(|boundary| boundary.region.as_ref().is_some_and(|of| of.text == region.name.text))
+        let numbers = self.index().boundaries_of(self, &region.name.text);
+        numbers
+            .iter()
+            .filter_map(|number| self.boundaries.get(*number))
+            .filter(|boundary| boundary.region.is_some())
+    }
+
+    fn index(&self) -> &Index {
+        self.index.get_or_init(|| Index::of(self))
     }
 }

@@ -41,6 +41,8 @@ pub struct Names<'t> {
     by_name: HashMap<&'t str, usize>,
     members: HashMap<(usize, &'static str, usize), usize>,
     entities: HashMap<(EntityKey, &'t str), usize>,
+    /// The first boundary of a name at a region.
+    boundaries: HashMap<(&'t str, Option<&'t str>), usize>,
 }
 
 /// Names of boundaries are their region's own; all others are the deck's.
@@ -114,13 +116,13 @@ impl<'t> Names<'t> {
     ) {
         let Some(entry) = entries.get(index) else { return };
         if kind == EntityKey::Boundary {
-            let region = entry.arguments.get(1).and_then(|list| list.first()).map(|expression| &expression.kind);
-            let again = entries.iter().take(index).find(|other| {
-                other.row.kind == EntryKind::Boundary
-                    && own_name(other) == Some(name)
-                    && other.arguments.get(1).and_then(|list| list.first()).map(|expression| &expression.kind) == region
+            let region = entry.arguments.get(1).and_then(|list| list.first().copied());
+            let region: Option<&'t str> = region.and_then(|expression| match &expression.kind {
+                ExpressionKind::Word(word) => Some(&**word),
+                _ => None,
             });
-            if let Some(first) = again {
+            let first = *self.boundaries.entry((name, region)).or_insert(index);
+            if let Some(first) = entries.get(first).filter(|_| first != index) {
                 findings.push(repeated(name, entry.name().map_or(entry.head, |(_, place)| place), first.head));
             }
             self.entities.entry((kind, name)).or_insert(index);

@@ -221,7 +221,7 @@ fn closed(world: &World, path: &Path) -> Option<Closed> {
     let worked_out: WorkedOut = world.work_out(path, Some(path));
     let diagnostics = diagnostics::of(world, &worked_out);
     let symbols = match &worked_out.deck {
-        Ok(deck) => { let _ = (Places::new(world, deck),); Vec::new() },
+        Ok(deck) => super::symbols::of_workspace(&Places::new(world, deck)),
         Err(_) => Vec::new(),
     };
     Some(Closed {

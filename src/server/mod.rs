@@ -12,17 +12,23 @@
 //! several messages at a time, so that edits can overtake one another, and does not end on `exit`.
 
 mod abilities;
+mod across;
 mod analyst;
+mod changes;
+mod completing;
 mod diagnostics;
 mod folder;
 mod handlers;
 mod places;
 mod progress;
+mod reading;
 mod reception;
 mod reports;
 mod settings;
 mod shared;
+mod symbols;
 mod text;
+mod tokens;
 mod transport;
 mod watchdog;
 mod world;

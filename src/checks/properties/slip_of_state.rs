@@ -8,7 +8,8 @@ use crate::checks::Subject;
 use crate::checks::density_law::assess::temperature;
 use crate::quantity::{Scale, parse_unit};
 use crate::substances::Medium;
-use crate::syntax::Level;
+use crate::syntax::{Level, Place};
+use std::collections::HashMap;
 
 const ZERO_CELSIUS: f64 = 273.15;
 /// Pressures of air at places where people work, from above 4000 m to below sea level, Pa (ISO 2533).
@@ -22,7 +23,8 @@ const NEAR: f64 = 100.0;
 pub fn slips(subject: &Subject<'_>) -> Vec<Slip> {
     let case = subject.case;
     let temperatures = temperatures(case);
-    let mut slips: Vec<Slip> = temperatures.iter().filter_map(|stated| of_temperature(stated, &temperatures)).collect();
+    let middles = Middles::of(&temperatures);
+    let mut slips: Vec<Slip> = temperatures.iter().filter_map(|stated| of_temperature(stated, &middles)).collect();
     slips.extend(case.fluids.iter().filter_map(|fluid| of_pressure(case, fluid.reference_pressure.as_ref()?, fluid)));
     slips.extend(case.ambient_pressure.as_ref().and_then(|value| in_other_pressure_unit(value, "case")));
     slips
@@ -85,11 +87,11 @@ fn stated<'a>(value: &'a Value, owner: &'a str, (medium, pressure): (Option<Medi
     Stated { value, owner, medium, pressure }
 }
 
-fn of_temperature(stated: &Stated<'_>, all: &[Stated<'_>]) -> Option<Slip> {
+fn of_temperature(stated: &Stated<'_>, middles: &Middles) -> Option<Slip> {
     let unit = parse_unit(&stated.value.origin.unit).ok()?;
     let number = number_written(stated.value)?;
     let si = stated.value.si;
-    let middle = middle_of_others(stated, all);
+    let middle = middles.of_others(literal(stated.value));
     let holds = |temperature: f64| stated.medium.is_none_or(|medium| medium.holds_at(temperature));
     let (meant, evidence) = if unit.scale == Scale::TemperatureOpen && unit.factor == 1.0 {
         let kelvin = number + ZERO_CELSIUS;
@@ -129,13 +131,39 @@ fn of_temperature(stated: &Stated<'_>, all: &[Stated<'_>]) -> Option<Slip> {
     Some(Slip::of(stated.value, stated.owner, Level::Error, meant, middle.is_some(), message))
 }
 
-/// The median of the other temperatures of the deck, K; `None` where there is none.
-fn middle_of_others(stated: &Stated<'_>, all: &[Stated<'_>]) -> Option<f64> {
-    let literal = |value: &Value| value.origin.literal.unwrap_or(value.origin.place);
-    let others = all.iter().filter(|other| literal(other.value) != literal(stated.value));
-    let mut values: Vec<f64> = others.map(|other| other.value.si).filter(|si| si.is_finite()).collect();
-    values.sort_by(f64::total_cmp);
-    values.get(values.len() / 2).copied()
+/// The known temperatures of the deck, K, rising, and at which of them each literal stands: a long deck has many, and the
+/// median of the others is wanted for each.
+struct Middles {
+    sorted: Vec<f64>,
+    at: HashMap<Place, Vec<usize>>,
+}
+
+impl Middles {
+    fn of(all: &[Stated<'_>]) -> Middles {
+        let known = all.iter().filter(|stated| stated.value.si.is_finite());
+        let mut sorted: Vec<(f64, Place)> = known.map(|stated| (stated.value.si, literal(stated.value))).collect();
+        sorted.sort_by(|a, b| f64::total_cmp(&a.0, &b.0));
+        let mut at: HashMap<Place, Vec<usize>> = HashMap::new();
+        for (index, (_, place)) in sorted.iter().enumerate() {
+            at.entry(*place).or_default().push(index);
+        }
+        Middles { sorted: sorted.into_iter().map(|(si, _)| si).collect(), at }
+    }
+
+    /// The median of the temperatures that do not come from the literal, K; `None` where there is none.
+    fn of_others(&self, literal: Place) -> Option<f64> {
+        let own = self.at.get(&literal).map_or(&[][..], Vec::as_slice);
+        let mut middle = (self.sorted.len() - own.len()) / 2;
+        // Over those that are left out, which rise.
+        for left_out in own {
+            middle += usize::from(*left_out <= middle);
+        }
+        self.sorted.get(middle).copied()
+    }
+}
+
+fn literal(value: &Value) -> Place {
+    value.origin.literal.unwrap_or(value.origin.place)
 }
 
 fn of_pressure(case: &Case, value: &Value, fluid: &Fluid) -> Option<Slip> {
