@@ -20,7 +20,7 @@ pub fn findings(text: &str) -> Vec<Finding> {
 }
 
 /// The physics of the regions of a text, in their order.
-pub fn physics(text: &str) -> Vec<RegionPhysics> {
+pub fn physics(text: &str) -> Vec<crate::physics::model::RegionPhysics> {
     analyse_text(text, TODAY).physics.regions
 }
 

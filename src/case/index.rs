@@ -12,14 +12,16 @@ pub struct Index {
     boundaries: Vec<usize>,
 }
 
+/// The numbers below `count` in the order of their names.
+fn sorted<'c>(count: usize, name: &dyn Fn(usize) -> &'c str) -> Vec<usize> {
+    let mut numbers: Vec<usize> = (0..count).collect();
+    numbers.sort_by(|a, b| name(*a).cmp(name(*b)));
+    numbers
+}
+
 impl Index {
     /// The index of a case.
     pub fn of(case: &Case) -> Index {
-        let sorted = |count: usize, name: &dyn Fn(usize) -> &str| {
-            let mut numbers: Vec<usize> = (0..count).collect();
-            numbers.sort_by(|a, b| name(*a).cmp(name(*b)));
-            numbers
-        };
         Index {
             regions: sorted(case.regions.len(), &|number| region_name(case, number)),
             fluids: sorted(case.fluids.len(), &|number| fluid_name(case, number)),

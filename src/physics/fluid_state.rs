@@ -90,7 +90,7 @@ impl Source<'_> {
             if temperature.is_nan() || lowest > highest {
                 return None;
             }
-            medium.properties(temperature.clamp(lowest, highest), self.pressure)
+            medium.properties(temperature.max(lowest).min(highest), self.pressure)
         });
         combine(self.fluid, base, temperature)
     }

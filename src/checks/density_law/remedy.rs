@@ -43,7 +43,7 @@ pub fn narrower(assessed: &Assessed<'_>, pick: fn(&CriterionValues) -> f64, limi
     if !(lowest <= highest && reference.is_finite()) {
         return None;
     }
-    let about = reference.clamp(lowest, highest);
+    let about = reference.max(lowest).min(highest);
     let value = |conditions: Conditions| pick(&assessed.under(&conditions));
     let hot_end = highest - about >= about - lowest;
     let one_end = most_within(limit, |share| {

@@ -63,7 +63,7 @@ fn bracketed(low: (f64, f64), high: (f64, f64), tolerance: f64, function: &mut i
         } else {
             0.5
         };
-        share = if share.is_nan() { 0.5 } else { share.clamp(least, 1.0 - least) };
+        share = if share.is_nan() { 0.5 } else { share.max(least).min(1.0 - least) };
     }
     Some(Root { at: if at_a.abs() < at_b.abs() { a } else { b }, converged: false })
 }
@@ -78,8 +78,8 @@ pub fn near(
     mut function: impl FnMut(f64) -> f64,
 ) -> Option<Root> {
     let mut reach = reach.max(tolerance);
-    let mut low = (guess - reach).clamp(least, most);
-    let mut high = (guess + reach).clamp(least, most);
+    let mut low = (guess - reach).max(least).min(most);
+    let mut high = (guess + reach).max(least).min(most);
     let mut at_low = function(low);
     let mut at_high = function(high);
     for _ in 0..STEPS {
