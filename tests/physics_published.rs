@@ -50,10 +50,12 @@ fn the_glass_door() {
 #[test]
 fn tian_and_karayiannis() {
     // Tian and Karayiannis, Int. J. Heat Mass Transfer 43 (2000) 849-866: 0.75 m square, 50 and 10 degC, Ra 1.58e9, Pr 0.71.
-    let cavity = one("case \"t\"\n    gravity 9.80665 m/s^2\nfluid f\n    substance air\n    reference 30 degC\nregion r\n    \
+    let cavity = one(
+        "case \"t\"\n    gravity 9.80665 m/s^2\nfluid f\n    substance air\n    reference 30 degC\nregion r\n    \
          box 0.75 m by 1.5 m by 0.75 m\n    filled with f\nboundary hot of r\n    side west\n    wall\n    held at 50 degC\n\
          boundary cold of r\n    side east\n    wall\n    held at 10 degC\nboundary rest of r\n    side remaining\n    wall\n    \
-         insulated\nrun\n    steady\n");
+         insulated\nrun\n    steady\n",
+    );
     assert_eq!(cavity.arrangement.kind, ArrangementKind::SideHeatedCavity);
     within(0.06, cavity.numbers.rayleigh, 1.58e9);
     within(0.01, cavity.numbers.prandtl, 0.71);
@@ -86,7 +88,8 @@ fn de_vahl_davis() {
 
 #[test]
 fn plates_by_their_flux() {
-    for (substance, name, flux) in [("air", "plate air flux", "300 W/m^2"), ("water", "plate water flux", "2e4 W/m^2")] {
+    for (substance, name, flux) in [("air", "plate air flux", "300 W/m^2"), ("water", "plate water flux", "2e4 W/m^2")]
+    {
         let plate = plate(substance, "0.5 m", &format!("heated by {flux}"), "20 degC");
         let wall = reference(&format!("{name} mid-height wall"));
         rise_within(0.005, 293.15 + plate.numbers.difference, wall, 293.15);
@@ -101,18 +104,22 @@ fn a_plate_that_radiates() {
 
 #[test]
 fn a_cylinder_by_its_power() {
-    let cylinder = one("case \"t\"\n    gravity 9.80665 m/s^2\n    ambient 20 degC\nfluid f\n    substance air\n    reference 20 degC\nregion r\n    \
-         cylinder 50 mm by 1 m along x\n    surrounded by f\nboundary skin of r\n    side face\n    wall\n    heated by 60 W\nrun\n    steady\n");
+    let cylinder = one(
+        "case \"t\"\n    gravity 9.80665 m/s^2\n    ambient 20 degC\nfluid f\n    substance air\n    reference 20 degC\nregion r\n    \
+         cylinder 50 mm by 1 m along x\n    surrounded by f\nboundary skin of r\n    side face\n    wall\n    heated by 60 W\nrun\n    steady\n",
+    );
     assert_eq!(cylinder.arrangement.kind, ArrangementKind::HorizontalCylinder);
     rise_within(0.005, cylinder.bracket.unwrap().highest.value, reference("cylinder wall"), 293.15);
 }
 
 #[test]
 fn a_cabinet_in_series() {
-    let cabinet = one("case \"t\"\n    gravity 9.81 m/s^2\nfluid f\n    substance air\n    reference 25 degC at 0.79 bar\nregion r\n    \
+    let cabinet = one(
+        "case \"t\"\n    gravity 9.81 m/s^2\nfluid f\n    substance air\n    reference 25 degC at 0.79 bar\nregion r\n    \
          box 0.5 m by 0.6 m by 1.1 m\n    filled with f\nboundary boards of r\n    side west\n    wall\n    heated by 180 W\n\
          boundary skin of r\n    side east\n    wall\n    exchanges 6 W/m^2/K with 8 degC\nboundary rest of r\n    side remaining\n    \
-         wall\n    insulated\nrun\n    steady\n");
+         wall\n    insulated\nrun\n    steady\n",
+    );
     let bracket = cabinet.bracket.unwrap();
     let cold = reference("cabinet cold side");
     within(1e-6, bracket.lowest.value, cold);
@@ -121,9 +128,11 @@ fn a_cabinet_in_series() {
 
 #[test]
 fn a_channel_by_its_flux() {
-    let channel = one("case \"t\"\n    gravity 9.80665 m/s^2\n    ambient 25 degC\nfluid f\n    substance air\n    reference 25 degC\nregion r\n    \
+    let channel = one(
+        "case \"t\"\n    gravity 9.80665 m/s^2\n    ambient 25 degC\nfluid f\n    substance air\n    reference 25 degC\nregion r\n    \
          channel 8 mm by 0.2 m\n    filled with f\nboundary plates of r\n    side west, east\n    wall\n    heated by 150 W/m^2\n\
-         boundary ends of r\n    side bottom, top\n    opening\nrun\n    steady\n");
+         boundary ends of r\n    side bottom, top\n    opening\nrun\n    steady\n",
+    );
     rise_within(0.005, channel.bracket.unwrap().highest.value, reference("channel upper edge"), 298.15);
 }
 

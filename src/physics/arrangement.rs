@@ -376,7 +376,10 @@ mod tests {
     fn flow_through_and_channels() {
         let cube = "box 1 m by 1 m by 1 m";
         assert_eq!(kind(DOWN, cube, &[("west", "inlet"), ("east", "outlet")]), Kind::ThroughFlow);
-        assert_eq!(kind(DOWN, "channel 10 mm by 1 m", &[("west", HOT), ("bottom, top", "opening")]), Kind::VerticalChannel);
+        assert_eq!(
+            kind(DOWN, "channel 10 mm by 1 m", &[("west", HOT), ("bottom, top", "opening")]),
+            Kind::VerticalChannel
+        );
         assert_eq!(
             kind("gravity 9.81 m/s^2 along x", "channel 10 mm by 1 m", &[("west", HOT), ("bottom, top", "opening")]),
             Kind::ThroughFlow

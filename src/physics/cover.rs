@@ -122,7 +122,8 @@ mod tests {
     use crate::testing::TODAY;
     use crate::workspace::analyse_text;
 
-    const HEAD: &str = "fluid a\n    substance air\n    reference 20 degC\nregion r\n    box 2 m by 3 m by 4 m\n    filled with a\n";
+    const HEAD: &str =
+        "fluid a\n    substance air\n    reference 20 degC\nregion r\n    box 2 m by 3 m by 4 m\n    filled with a\n";
 
     fn covers(boundaries: &str, expected: &[(&str, f64)]) {
         let deck = analyse_text(&format!("{HEAD}{boundaries}"), TODAY);
@@ -182,7 +183,10 @@ mod tests {
                     boundary a1 of r\n    side around\nboundary a2 of r\n    side far\n";
         let deck = analyse_text(text, TODAY);
         let sides = covered_sides(&deck.case, &deck.case.regions[0]);
-        assert_eq!(sides.iter().map(|(side, own)| (*side, own.len())).collect::<Vec<_>>(), [(Side::Face, 1), (Side::Far, 1)]);
+        assert_eq!(
+            sides.iter().map(|(side, own)| (*side, own.len())).collect::<Vec<_>>(),
+            [(Side::Face, 1), (Side::Far, 1)]
+        );
         let area = area_of(&deck.case, &deck.case.regions[0], &deck.case.boundaries[0]);
         assert!((area - std::f64::consts::PI).abs() < 1e-12);
     }

@@ -202,7 +202,10 @@ mod tests {
     fn the_substance_where_nothing_is_stated() {
         let air = constants("substance air\n    reference 25 degC at 1 bar");
         // Air at 25 degC and 1 bar by CoolProp 8.0.0: 1.16855 kg/m3, 1006.4 J/(kg K), 18.45e-6 Pa s, 0.02623 W/(m K).
-        assert!((air.density / 1.16855 - 1.0).abs() < 0.003 && (air.viscosity / 18.45e-6 - 1.0).abs() < 0.005, "{air:?}");
+        assert!(
+            (air.density / 1.16855 - 1.0).abs() < 0.003 && (air.viscosity / 18.45e-6 - 1.0).abs() < 0.005,
+            "{air:?}"
+        );
         assert!((air.conductivity / 0.02623 - 1.0).abs() < 0.01 && (air.heat_capacity / 1006.4 - 1.0).abs() < 0.005);
     }
 
@@ -217,8 +220,12 @@ mod tests {
         assert!(close(own.diffusivity(), 3e-5) && close(own.viscosity, air.viscosity), "{own:?}");
         let own = constants("substance air\n    reference 25 degC at 1 bar\n    prandtl 0.9");
         assert!(close(own.prandtl(), 0.9) && close(own.viscosity, air.viscosity), "{own:?}");
-        let own = constants("substance air\n    reference 25 degC at 1 bar\n    conductivity 0.03 W/m/K\n    prandtl 0.9");
-        assert!(close(own.prandtl(), 0.9) && close(own.conductivity, 0.03) && close(own.density, air.density), "{own:?}");
+        let own =
+            constants("substance air\n    reference 25 degC at 1 bar\n    conductivity 0.03 W/m/K\n    prandtl 0.9");
+        assert!(
+            close(own.prandtl(), 0.9) && close(own.conductivity, 0.03) && close(own.density, air.density),
+            "{own:?}"
+        );
     }
 
     #[test]
@@ -227,7 +234,9 @@ mod tests {
             "reference 20 degC\n    density 900 kg/m^3\n    viscosity 0.1 Pa.s\n    heat-capacity 2 kJ/kg/K\n    \
              prandtl 1000\n    expansion 7e-4 1/K",
         );
-        assert!(close(own.conductivity, 0.2) && close(own.kinematic_viscosity(), 0.1 / 900.0) && close(own.expansion, 7e-4));
+        assert!(
+            close(own.conductivity, 0.2) && close(own.kinematic_viscosity(), 0.1 / 900.0) && close(own.expansion, 7e-4)
+        );
         // Viscosities of both kinds give the density.
         let own = constants("reference 20 degC\n    viscosity 0.1 Pa.s\n    kinematic-viscosity 1e-4 m^2/s");
         assert!(close(own.density, 1000.0) && own.conductivity.is_nan(), "{own:?}");

@@ -267,21 +267,28 @@ mod tests {
         physics(&text).remove(0)
     }
 
-    const CONSTANTS: &str = "reference 25 degC\n    kinematic-viscosity 2e-5 m^2/s\n    diffusivity 4e-5 m^2/s\n    expansion 4e-3 1/K";
+    const CONSTANTS: &str =
+        "reference 25 degC\n    kinematic-viscosity 2e-5 m^2/s\n    diffusivity 4e-5 m^2/s\n    expansion 4e-3 1/K";
 
     #[test]
     fn by_hand() {
         let r = cavity(CONSTANTS, "");
         let n = &r.numbers;
         // Ra = 10 · 4e-3 · 10 · 0.1³ / (2e-5 · 4e-5) = 5e5.
-        assert!((n.rayleigh / 5e5 - 1.0).abs() < 1e-9 && (n.prandtl - 0.5).abs() < 1e-12 && (n.grashof / 1e6 - 1.0).abs() < 1e-9);
+        assert!(
+            (n.rayleigh / 5e5 - 1.0).abs() < 1e-9
+                && (n.prandtl - 0.5).abs() < 1e-12
+                && (n.grashof / 1e6 - 1.0).abs() < 1e-9
+        );
         assert!((n.buoyant_velocity - (10.0_f64 * 4e-3 * 10.0 * 0.2).sqrt()).abs() < 1e-12);
         assert!((n.expansion_span - 0.04).abs() < 1e-12 && (n.difference - 10.0).abs() < 1e-9);
         // N² = g α ΔT / H; layer time H² / (a Ra_H^(1/2)) with Ra_H = 8 Ra; filling time H W / (a Ra_H^(1/4)).
         assert!((n.buoyancy_frequency - 2_f64.sqrt()).abs() < 1e-9, "{n:?}");
         assert!((n.boundary_layer_time - 0.04 / (4e-5 * 4e6_f64.sqrt())).abs() < 1e-6, "{n:?}");
         assert!((n.filling_time - 0.02 / (4e-5 * 4e6_f64.powf(0.25))).abs() < 1e-6, "{n:?}");
-        assert!(n.reynolds.is_nan() && n.richardson.is_nan() && n.heat_transfer_coefficient.is_nan() && n.nusselt > 1.0);
+        assert!(
+            n.reynolds.is_nan() && n.richardson.is_nan() && n.heat_transfer_coefficient.is_nan() && n.nusselt > 1.0
+        );
         assert!((n.thermal_layer - 0.05 / n.nusselt).abs() < 1e-12 && n.viscous_layer == n.thermal_layer);
     }
 

@@ -210,8 +210,9 @@ mod tests {
     fn one_outer_coefficient_without_end_is_a_held_wall() {
         let source = "source s in r\n    releases 200 W\n";
         let held = boxed(&format!("boundary skin of r\n    side remaining\n    wall\n    held at 20 degC\n{source}"));
-        let exchanging =
-            boxed(&format!("boundary skin of r\n    side remaining\n    wall\n    exchanges 1e7 W/m^2/K with 20 degC\n{source}"));
+        let exchanging = boxed(&format!(
+            "boundary skin of r\n    side remaining\n    wall\n    exchanges 1e7 W/m^2/K with 20 degC\n{source}"
+        ));
         let (held, exchanging) = (held.bracket.unwrap(), exchanging.bracket.unwrap());
         assert!((held.highest.value - exchanging.highest.value).abs() < 0.01, "{held:?} {exchanging:?}");
     }

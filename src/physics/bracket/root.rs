@@ -77,6 +77,10 @@ pub fn near(
     tolerance: f64,
     mut function: impl FnMut(f64) -> f64,
 ) -> Option<Root> {
+    // `max` and `min` would turn a guess that is no number into a bound.
+    if !guess.is_finite() {
+        return None;
+    }
     let mut reach = reach.max(tolerance);
     let mut low = (guess - reach).max(least).min(most);
     let mut high = (guess + reach).max(least).min(most);

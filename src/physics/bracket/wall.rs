@@ -161,7 +161,10 @@ mod tests {
             let estimate = end.estimate.as_ref().unwrap();
             assert!(!estimate.contains("converge"), "{estimate}");
             assert!(end.band.0 < end.value && end.value < end.band.1, "{end:?}");
-            assert!(end.set_by == if heat.ends_with(" W") { "boundary face by its power" } else { "boundary face by its flux" });
+            assert!(
+                end.set_by
+                    == if heat.ends_with(" W") { "boundary face by its power" } else { "boundary face by its flux" }
+            );
         }
     }
 
@@ -188,7 +191,9 @@ mod tests {
     #[test]
     fn losses_behind_a_wall_count() {
         let plain = plate("air", "heated by 300 W/m^2", "20 degC").bracket.unwrap();
-        let losing = plate("air", "heated by 300 W/m^2\n    radiates to 20 degC\n    emissivity 0.9", "20 degC").bracket.unwrap();
+        let losing = plate("air", "heated by 300 W/m^2\n    radiates to 20 degC\n    emissivity 0.9", "20 degC")
+            .bracket
+            .unwrap();
         let warmed = plate("air", "exchanges 10 W/m^2/K with 90 degC", "20 degC").bracket.unwrap();
         assert!(losing.highest.value < plain.highest.value - 10.0, "{losing:?}");
         assert!((293.15..363.15).contains(&warmed.highest.value), "{warmed:?}");
