@@ -4,12 +4,11 @@ use crate::case::model::{Boundary, BoundaryKind, Case, Heat, Radiation, Region};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
 use crate::checks::closure::parts::{Role, role};
 use crate::checks::look::{Weighed, estimate_note, regions};
+use crate::physics::conditions::STEFAN_BOLTZMANN;
 use crate::quantity::display::format_number;
 use crate::substances::Medium;
 use crate::syntax::{Finding, Level};
 
-/// Stefan-Boltzmann constant, W/(m² K⁴): 5.670374419e-8 (exact since 2019; CODATA 2018).
-const STEFAN_BOLTZMANN: f64 = 5.670_374_419e-8;
 /// Emissivity of a surface that states none: paint, paper, plastics, stone, glass and oxides lie at 0.85 to 0.95 (common practice).
 const USUAL_EMISSIVITY: f64 = 0.9;
 
