@@ -64,8 +64,34 @@ impl Copy {
 }
 
 const PIECES: &[&str] = &[
-    "", "", "x", " ", "\n", "\r\n", "    ", "#", "\"", "(", ")", " m", " degC", "1.5e3", " = ", "α", "ΔT", "🌡", "e\u{301}", "日本",
-    "given\n    T = 3 K\n", "region a\n", "# comment\n", "fluid air\n    substance air\n", " .. ", "| 1 m | 2 m |\n", "\t", "..",
+    "",
+    "",
+    "x",
+    " ",
+    "\n",
+    "\r\n",
+    "    ",
+    "#",
+    "\"",
+    "(",
+    ")",
+    " m",
+    " degC",
+    "1.5e3",
+    " = ",
+    "α",
+    "ΔT",
+    "🌡",
+    "e\u{301}",
+    "日本",
+    "given\n    T = 3 K\n",
+    "region a\n",
+    "# comment\n",
+    "fluid air\n    substance air\n",
+    " .. ",
+    "| 1 m | 2 m |\n",
+    "\t",
+    "..",
 ];
 
 fn one_change(copy: &mut Copy, numbers: &mut Numbers) -> Value {
@@ -106,7 +132,9 @@ fn many_edits_leave_what_a_fresh_open_gives() {
         let document = json!({"uri": URI});
         match version % 41 {
             0 => asked.push(client.request("textDocument/hover", json!({"textDocument": document, "position": at}))),
-            10 => asked.push(client.request("textDocument/completion", json!({"textDocument": document, "position": at}))),
+            10 => {
+                asked.push(client.request("textDocument/completion", json!({"textDocument": document, "position": at})))
+            }
             20 => asked.push(client.request("textDocument/documentSymbol", json!({"textDocument": document}))),
             30 => asked.push(client.request("textDocument/diagnostic", json!({"textDocument": document}))),
             _ => {}

@@ -221,7 +221,10 @@ fn closed(world: &World, path: &Path) -> Option<Closed> {
     let worked_out: WorkedOut = world.work_out(path, Some(path));
     let diagnostics = diagnostics::of(world, &worked_out);
     let symbols = match &worked_out.deck {
-        Ok(deck) => { let _ = (Places::new(world, deck),); Vec::new() },
+        Ok(deck) => {
+            let _ = (Places::new(world, deck),);
+            Vec::new()
+        }
         Err(_) => Vec::new(),
     };
     Some(Closed {

@@ -3,13 +3,13 @@
 use super::shared::Shared;
 use std::sync::Arc;
 use std::sync::atomic::{AtomicBool, AtomicUsize, Ordering};
+use tower_lsp::Client;
 use tower_lsp::lsp_types::notification::Progress as ProgressNotification;
 use tower_lsp::lsp_types::request::WorkDoneProgressCreate;
 use tower_lsp::lsp_types::{
     NumberOrString, ProgressParams, ProgressParamsValue, ProgressToken, WorkDoneProgress, WorkDoneProgressBegin,
     WorkDoneProgressCreateParams, WorkDoneProgressEnd, WorkDoneProgressReport,
 };
-use tower_lsp::Client;
 
 /// Fewest decks that are worth showing progress for.
 const WORTH_SHOWING: usize = 20;
