@@ -1,6 +1,8 @@
 //! Every remedy that a finding offers as a change of text: carried out, the finding is gone and, in a whole deck, no other
 //! has come. Over all decks of the tests, and over the texts in the tests of the checks themselves.
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)]
+
 use deckline::ide::actions::fix_all;
 use deckline::syntax::change::apply;
 use deckline::syntax::{Edit, FileId, parse};

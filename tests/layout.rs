@@ -1,5 +1,7 @@
 //! The layout of decks: the sample of the language, and what holds for every text.
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)]
+
 use deckline::syntax::layout::laid_out;
 use deckline::syntax::parse;
 use deckline::syntax::tokens::{TokenKind, tokens};
