@@ -15,11 +15,6 @@ pub struct Index {
 impl Index {
     /// The index of a case.
     pub fn of(case: &Case) -> Index {
-        let sorted = |count: usize, name: &dyn Fn(usize) -> &str| {
-            let mut numbers: Vec<usize> = (0..count).collect();
-            numbers.sort_by(|a, b| name(*a).cmp(name(*b)));
-            numbers
-        };
         Index {
             regions: sorted(case.regions.len(), &|number| region_name(case, number)),
             fluids: sorted(case.fluids.len(), &|number| fluid_name(case, number)),
@@ -41,6 +36,12 @@ impl Index {
     pub fn boundaries_of(&self, case: &Case, region: &str) -> &[usize] {
         named(&self.boundaries, region, &|number| boundary_region(case, number))
     }
+}
+
+fn sorted<'c>(count: usize, name_of: &dyn Fn(usize) -> &'c str) -> Vec<usize> {
+    let mut numbers: Vec<usize> = (0..count).collect();
+    numbers.sort_by(|a, b| name_of(*a).cmp(name_of(*b)));
+    numbers
 }
 
 fn named<'i, 'c>(numbers: &'i [usize], name: &str, name_of: &dyn Fn(usize) -> &'c str) -> &'i [usize] {
