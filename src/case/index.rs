@@ -45,6 +45,12 @@ impl Index {
     }
 }
 
+fn sorted<'c>(count: usize, name_of: &dyn Fn(usize) -> &'c str) -> Vec<usize> {
+    let mut numbers: Vec<usize> = (0..count).collect();
+    numbers.sort_by(|a, b| name_of(*a).cmp(name_of(*b)));
+    numbers
+}
+
 fn named<'i, 'c>(numbers: &'i [usize], name: &str, name_of: &dyn Fn(usize) -> &'c str) -> &'i [usize] {
     let start = numbers.partition_point(|number| name_of(*number) < name);
     let rest = numbers.get(start..).unwrap_or_default();

@@ -8,7 +8,7 @@ use super::shared::{Shared, locked};
 use super::world::{WorkedOut, World};
 use crate::workspace::practice::PRACTICE_FILE;
 use crate::workspace::walk;
-use std::collections::{BTreeMap, BTreeSet};
+use std::collections::{BTreeMap, BTreeSet, HashMap};
 use std::panic::{AssertUnwindSafe, catch_unwind};
 use std::path::{Path, PathBuf};
 use std::sync::{Arc, Condvar, Mutex, PoisonError};
@@ -28,6 +28,8 @@ pub struct Folder {
 #[derive(Default)]
 struct State {
     closed: BTreeMap<PathBuf, Closed>,
+    /// For each path, the closed decks that looked at it: an edit asks for it, so it must not take a walk through all.
+    users: HashMap<Arc<Path>, BTreeSet<PathBuf>>,
     to_walk: bool,
     waiting: BTreeSet<PathBuf>,
     not_before: Option<Instant>,
@@ -49,7 +51,7 @@ pub struct Closed {
     /// What it defines.
     pub symbols: Arc<[SymbolInformation]>,
     /// The paths it was made from.
-    looked_at: Arc<[PathBuf]>,
+    looked_at: Arc<[Arc<Path>]>,
 }
 
 impl Folder {
@@ -69,12 +71,8 @@ impl Folder {
     pub fn changed(&self, path: &Path) {
         let mut state = locked(&self.state);
         state.changed_meanwhile.push(path.to_path_buf());
-        let concerned: Vec<PathBuf> = state
-            .closed
-            .iter()
-            .filter(|(own, closed)| own.as_path() != path && closed.looked_at.iter().any(|seen| seen == path))
-            .map(|(own, _)| own.clone())
-            .collect();
+        let users = state.users.get(path).into_iter().flatten();
+        let concerned: Vec<PathBuf> = users.filter(|own| own.as_path() != path).cloned().collect();
         if !concerned.is_empty() {
             state.waiting.extend(concerned);
             state.not_before = Some(Instant::now() + REST);
@@ -94,7 +92,7 @@ impl Folder {
     pub fn forget(&self, path: &Path) -> Option<Closed> {
         let mut state = locked(&self.state);
         state.waiting.remove(path);
-        state.closed.remove(path)
+        state.forget(path)
     }
 
     /// Knows nothing any more of the decks outside these folders; gives them.
@@ -103,7 +101,7 @@ impl Folder {
         let is_inside = |path: &Path| folders.iter().any(|folder| path.starts_with(folder));
         let outside: Vec<PathBuf> = state.closed.keys().filter(|path| !is_inside(path)).cloned().collect();
         state.waiting.retain(|path| is_inside(path));
-        outside.iter().filter_map(|path| state.closed.remove(path)).collect()
+        outside.iter().filter_map(|path| state.forget(path)).collect()
     }
 
     /// Stops what is being done, if the client means this.
@@ -127,8 +125,36 @@ impl Folder {
     /// The closed decks that looked at a path.
     pub fn that_looked_at(&self, path: &Path) -> Vec<PathBuf> {
         let state = locked(&self.state);
-        let looked = state.closed.iter().filter(|(_, closed)| closed.looked_at.iter().any(|seen| seen == path));
-        looked.map(|(own, _)| own.clone()).collect()
+        state.users.get(path).into_iter().flatten().cloned().collect()
+    }
+}
+
+impl State {
+    /// Knows this of a deck from now on; gives what was known before.
+    fn know(&mut self, path: PathBuf, mut known: Closed) -> Option<Closed> {
+        let before = self.forget(&path);
+        // One copy of each path, however many decks look at it.
+        let shared =
+            |seen: &Arc<Path>| self.users.get_key_value(seen).map_or_else(|| seen.clone(), |(it, _)| it.clone());
+        known.looked_at = known.looked_at.iter().map(shared).collect();
+        for seen in known.looked_at.iter() {
+            self.users.entry(seen.clone()).or_default().insert(path.clone());
+        }
+        self.closed.insert(path, known);
+        before
+    }
+
+    fn forget(&mut self, path: &Path) -> Option<Closed> {
+        let known = self.closed.remove(path)?;
+        for seen in known.looked_at.iter() {
+            if let Some(users) = self.users.get_mut(seen) {
+                users.remove(path);
+                if users.is_empty() {
+                    self.users.remove(seen);
+                }
+            }
+        }
+        Some(known)
     }
 }
 
@@ -197,14 +223,15 @@ fn check(shared: &Shared, path: PathBuf) {
     // Held until the findings are sent: a document that is opened now sends its own after these.
     let present = shared.hold();
     let mut state = locked(&shared.folder.state);
-    if let Some(progress) = &state.progress {
-        progress.report(state.waiting.len());
+    let left = state.waiting.len();
+    if let Some(progress) = &mut state.progress {
+        progress.report(left);
     }
     let Some(known) = known.filter(|_| present.at(&path).is_none()) else { return };
-    if state.changed_meanwhile.iter().any(|changed| known.looked_at.contains(changed)) {
+    if state.changed_meanwhile.iter().any(|changed| known.looked_at.iter().any(|seen| **seen == **changed)) {
         state.waiting.insert(path.clone());
     }
-    let before = state.closed.insert(path, known.clone());
+    let before = state.know(path, known.clone());
     if before.is_none_or(|before| before.result_id != known.result_id) {
         state.has_news = true;
         drop(state);
@@ -229,6 +256,6 @@ fn closed(world: &World, path: &Path) -> Option<Closed> {
         result_id: diagnostics::result_id(&diagnostics),
         diagnostics: diagnostics.into(),
         symbols: symbols.into(),
-        looked_at: worked_out.looked_at.into_iter().collect(),
+        looked_at: worked_out.looked_at.into_iter().map(Arc::from).collect(),
     })
 }
