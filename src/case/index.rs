@@ -12,13 +12,6 @@ pub struct Index {
     boundaries: Vec<usize>,
 }
 
-/// The numbers below `count` in the order of their names.
-fn sorted<'c>(count: usize, name: &dyn Fn(usize) -> &'c str) -> Vec<usize> {
-    let mut numbers: Vec<usize> = (0..count).collect();
-    numbers.sort_by(|a, b| name(*a).cmp(name(*b)));
-    numbers
-}
-
 impl Index {
     /// The index of a case.
     pub fn of(case: &Case) -> Index {
