@@ -161,7 +161,9 @@ impl<'a> Medium<'a> {
             Some(density) => {
                 let step = 1e-4 * at.pressure;
                 let rho = |pressure| self.value(density, Quantity::Density, At { pressure, ..at });
-                (rho(at.pressure + step) - rho(at.pressure - step)) / (2.0 * step * rho(at.pressure))
+                let slope = (rho(at.pressure + step) - rho(at.pressure - step)) / (2.0 * step * rho(at.pressure));
+                // A density that does not know of pressure says nothing of compressibility.
+                if slope == 0.0 { f64::NAN } else { slope }
             }
             None => f64::NAN,
         }
