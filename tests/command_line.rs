@@ -1,6 +1,6 @@
 //! The program as it is called: exit status, what goes to which stream, and what becomes of bad input.
 
-#![allow(clippy::unwrap_used, clippy::panic)]
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)]
 
 use std::fs;
 use std::io::Write;

@@ -4,6 +4,8 @@
 //! or above must be marked on its line, and every mark must be met. `UPDATE=1 cargo test --test decks` writes the marks
 //! anew; read the difference before it is committed.
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)] // a test fails loudly
+
 use deckline::syntax::Level;
 use deckline::testing::{TODAY, differences, marks};
 use deckline::workspace::{Deck, Disk, Options, analyse, walk};

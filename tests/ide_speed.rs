@@ -1,6 +1,8 @@
 //! How long the editor's questions take on a deck of 10,000 lines. The times are printed; the bound is that of the design
 //! (2 ms) in a release build and a loose one otherwise.
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)] // a test fails loudly
+
 use deckline::ide::{
     actions, completion, folding, format, hover, inlay, navigate, selection, signature, symbols, tokens,
 };

@@ -1,6 +1,8 @@
 //! The physics of whole decks against published cases and against `physics_reference.csv`, made by
 //! `physics_reference.py` with reference libraries.
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)] // a test fails loudly
+
 use deckline::physics::model::{ArrangementKind, RegionPhysics};
 use deckline::testing::physics;
 

@@ -1,7 +1,7 @@
 //! Every command in the README with the output that stands below it, run again. `UPDATE=1 cargo test --test readme` writes
 //! what comes out now; read the difference before it is committed.
 
-#![allow(clippy::unwrap_used)]
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)]
 
 use std::path::Path;
 use std::process::Command;

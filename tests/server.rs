@@ -1,6 +1,8 @@
 //! The language server over pipes, as an editor meets it: order of edits, ends of the process, broken messages, findings
 //! that come and go.
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)] // a test fails loudly
+
 #[path = "lsp/client.rs"]
 mod client;
 #[path = "lsp/decks.rs"]
