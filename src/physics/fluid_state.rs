@@ -23,6 +23,8 @@ pub struct Source<'a> {
     pub medium: Option<Medium<'a>>,
     /// Pressure, Pa.
     pub pressure: f64,
+    /// Temperatures over which the substance's data hold and it neither boils nor condenses, K.
+    pub range: (f64, f64),
 }
 
 /// Properties as heat transfer needs them. `NaN` for what is not known: a deck may give ν and a alone.
@@ -78,7 +80,19 @@ pub fn source<'a>(case: &'a Case, region: &Region) -> Option<Source<'a>> {
         .flatten()
         .next()
         .map_or(STANDARD_ATMOSPHERE, |value| value.si);
-    Some(Source { fluid, index, medium: medium(case, fluid), pressure })
+    let medium = medium(case, fluid);
+    Some(Source { fluid, index, medium, pressure, range: range(medium, pressure) })
+}
+
+/// A liquid's range ends where it boils; a vapour's begins there.
+fn range(medium: Option<Medium<'_>>, pressure: f64) -> (f64, f64) {
+    let Some(medium) = medium else { return (0.0, f64::INFINITY) };
+    let (lowest, highest) = medium.range();
+    match medium.boiling(pressure) {
+        Some(boiling) if medium.is_gas() => (lowest.max(boiling), highest),
+        Some(boiling) => (lowest, highest.min(boiling)),
+        None => (lowest, highest),
+    }
 }
 
 impl Source<'_> {
@@ -86,8 +100,9 @@ impl Source<'_> {
     /// another check speaks of that, and an estimate says so.
     pub fn at(&self, temperature: f64) -> Transport {
         let base = self.medium.and_then(|medium| {
-            let (lowest, highest) = medium.range();
-            if temperature.is_nan() || lowest > highest {
+            let (lowest, highest) = self.range;
+            // `clamp` demands bounds in order and no `NaN` among them, which a deck's own substance may have.
+            if temperature.is_nan() || lowest.is_nan() || highest.is_nan() || lowest > highest {
                 return None;
             }
             medium.properties(temperature.max(lowest).min(highest), self.pressure)
@@ -97,7 +112,8 @@ impl Source<'_> {
 
     /// Whether the substance's data hold at a temperature; so do the constants of a fluid without a substance.
     pub fn holds_at(&self, temperature: f64) -> bool {
-        self.medium.is_none_or(|medium| medium.holds_at(temperature))
+        let (lowest, highest) = self.range;
+        temperature >= lowest - 1e-6 && temperature <= highest + 1e-6
     }
 
     /// Whether the properties are the same at every temperature.

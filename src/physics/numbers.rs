@@ -225,7 +225,8 @@ fn layers_and_times(question: &Question<'_>, fluid: &Transport, numbers: &mut Nu
     numbers.viscous_layer = known(scales::viscous_layer(numbers.thermal_layer, numbers.prandtl));
     let height = placement.height;
     let rise = stratification(question, numbers.difference);
-    numbers.buoyancy_frequency = (gravity * fluid.expansion.abs() * rise.max(0.0) / height).sqrt();
+    numbers.buoyancy_frequency =
+        if rise <= 0.0 { 0.0 } else { (gravity * fluid.expansion.abs() * rise / height).sqrt() };
     let along_walls = !matches!(
         placement.kind,
         Kind::LayerHeatedFromBelow | Kind::StableLayer | Kind::PlateFacingUp | Kind::PlateFacingDown | Kind::Unknown

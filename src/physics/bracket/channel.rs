@@ -27,7 +27,8 @@ pub fn plates<'a>(question: &Question<'a>, inlet: f64) -> Option<Found<'a>> {
         if condition.is_level() || !is_plate(one.piece.side) {
             // What no correlation for channels covers: as an upright plate in fluid at the inlet's temperature.
             let surface = Surface::Upright(question.placement.run);
-            let at = wall::temperature(question.source, question.gravity, surface, condition, inlet)?;
+            let inside = wall::Inside { surface, gravity: question.gravity, emissivity: 0.0 };
+            let at = wall::temperature(question.source, inside, condition, inlet)?;
             found.set_wall(index, &at, at.band);
             continue;
         }
@@ -39,6 +40,7 @@ pub fn plates<'a>(question: &Question<'a>, inlet: f64) -> Option<Found<'a>> {
             film,
             holds: question.source.holds_at(film),
             converged,
+            has_radiation: false,
         };
         found.set_how(index, edge.0, edge.0, (edge.1.min(edge.2), edge.1.max(edge.2)), how);
     }

@@ -43,9 +43,9 @@ pub fn transient<'a>(question: &Question<'a>, sizes: &Sizes) -> Option<Found<'a>
                 last + (start - last) * (-duration * conductance.max(0.0) / capacity).exp()
             };
             let end = approach(Edge::Value, settled.bulk);
-            let bulk = |edge| network.bulk(settled.bulk, &settled.fluid, edge).map_or(f64::NAN, |root| root.at);
-            let edges = [approach(Edge::Low, bulk(Edge::Low)), approach(Edge::High, bulk(Edge::High))];
-            (end, (edges[0].min(edges[1]), edges[0].max(edges[1])), settled.converged)
+            let (weak, strong) = network.edges(settled.bulk, &settled.fluid);
+            let (weak, strong) = (approach(Edge::Low, weak), approach(Edge::High, strong));
+            (end, (weak.min(strong), weak.max(strong)), settled.converged)
         }
         None => {
             let heat = network.heat(start, &fluid, Edge::Value);

@@ -55,6 +55,7 @@ pub fn plumes<'a>(question: &Question<'a>, found: &mut Found<'a>, bulk: f64) {
             film: bulk,
             holds: question.source.holds_at(bulk),
             converged: true,
+            has_radiation: false,
         };
         let band = (bulk + excess(gravity.low), bulk + AXIS_OVER_MEAN * excess(gravity.high));
         let place = source.releases.as_ref().map(|value| value.origin.place);

@@ -54,6 +54,9 @@ fn bracketed(low: (f64, f64), high: (f64, f64), tolerance: f64, function: &mut i
         if least > 0.5 || at_a == 0.0 {
             return Some(Root { at: best, converged: true });
         }
+        if !least.is_finite() {
+            return None;
+        }
         let xi = (a - b) / (c - b);
         let phi = (at_a - at_b) / (at_c - at_b);
         let interpolates = phi * phi < xi && (1.0 - phi) * (1.0 - phi) < 1.0 - xi;
