@@ -42,7 +42,8 @@ fn write_marks(path: &Path, deck: &Deck) {
     let mut found: Vec<(usize, &str, &str)> = deck
         .findings
         .iter()
-        .filter(|finding| finding.place.file.0 == 0 && finding.waived.is_none() && finding.level >= Level::Information)
+        .filter(|finding| finding.place.file.0 == 0 && finding.waived.is_none())
+        .filter(|finding| finding.level >= Level::Information || old.iter().any(|mark| mark.check == finding.check))
         .map(|finding| {
             (text[..finding.place.span.start].matches('\n').count() + 1, finding.check, finding.message.as_str())
         })
