@@ -8,8 +8,8 @@ use crate::quantity::display::{format_in, format_number};
 use crate::quantity::parse_unit;
 use crate::syntax::{Edit, Fix, Span};
 
-/// Halvings in the search for the widest span within a limit: to 1/65536 of the span.
-const HALVINGS: u32 = 16;
+/// Halvings in the search for the widest span within a limit: to 1/16384 of the span.
+const HALVINGS: u32 = 14;
 
 /// The density law that follows the true density.
 pub fn other_law(assessed: &Assessed<'_>) -> &'static str {
