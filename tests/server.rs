@@ -108,7 +108,8 @@ fn the_decks_of_a_folder_are_checked_with_progress_and_cleared_when_deleted() {
     let folder = folder("folder");
     for number in 0..30 {
         let unit = if number == 17 { "furlongs_of_old" } else { "m" };
-        std::fs::write(folder.join(format!("{number:02}.buoy")), format!("given\n    a = 1 {unit}\n")).expect("written");
+        std::fs::write(folder.join(format!("{number:02}.buoy")), format!("given\n    a = 1 {unit}\n"))
+            .expect("written");
     }
     let mut client = Client::initialized(json!({
         "workspaceFolders": [{"uri": uri(&folder), "name": "decks"}],
@@ -123,7 +124,9 @@ fn the_decks_of_a_folder_are_checked_with_progress_and_cleared_when_deleted() {
     let progress = |kind: &'static str| {
         let token = token.clone();
         move |message: &Value| {
-            message["method"] == "$/progress" && message["params"]["token"] == token && message["params"]["value"]["kind"] == kind
+            message["method"] == "$/progress"
+                && message["params"]["token"] == token
+                && message["params"]["value"]["kind"] == kind
         }
     };
     let (began, _) = client.wait("the beginning", progress("begin"));
@@ -142,7 +145,7 @@ fn the_decks_of_a_folder_are_checked_with_progress_and_cleared_when_deleted() {
 #[test]
 fn settings_count_from_the_start_and_when_they_change() {
     let mut client = Client::initialized(json!({"initializationOptions": {"gate": "error"}}));
-    client.open(URI, 1, "given\n    height = 1 m\n");
+    client.open(URI, 1, "given\n    height = 1 m\n\nregion a\n    box 1 m by 1 m by 1 m\n");
     let (_, found) = client.findings(URI, 1);
     assert!(!codes(&found).contains(&"unused-name".to_string()), "{found}");
     client.notify("workspace/didChangeConfiguration", json!({"settings": {"deckline": {"gate": "hint"}}}));
@@ -156,17 +159,23 @@ fn settings_count_from_the_start_and_when_they_change() {
 fn positions_count_as_agreed() {
     // In front of the unit stand α (2 bytes, 1 unit) and 🌡 (4 bytes, 2 units).
     let text = "given\r\n    α = 1 m \"🌡\"\r\n    b = α + 1 furlongs_of_old";
-    for (offered, chosen) in [(json!(["utf-8", "utf-16"]), "utf-8"), (json!(["utf-16"]), "utf-16"), (Value::Null, "utf-16")] {
+    for (offered, chosen) in
+        [(json!(["utf-8", "utf-16"]), "utf-8"), (json!(["utf-16"]), "utf-16"), (Value::Null, "utf-16")]
+    {
         let mut client = Client::start();
         let capabilities = json!({"general": {"positionEncodings": offered}});
-        let id = client.request("initialize", json!({"processId": null, "rootUri": null, "capabilities": capabilities}));
+        let id =
+            client.request("initialize", json!({"processId": null, "rootUri": null, "capabilities": capabilities}));
         assert_eq!(client.answer(id)["result"]["capabilities"]["positionEncoding"], chosen);
         client.notify("initialized", json!({}));
         client.open(URI, 1, text);
         let (_, found) = client.findings(URI, 1);
         let unit = found.as_array().expect("a list").iter().find(|finding| finding["code"] == "unknown-unit");
         let extra = u64::from(chosen == "utf-8");
-        assert_eq!(unit.expect("a finding")["range"], json!({"start": place(2, 14 + extra), "end": place(2, 29 + extra)}));
+        assert_eq!(
+            unit.expect("a finding")["range"],
+            json!({"start": place(2, 14 + extra), "end": place(2, 29 + extra)})
+        );
         client.leave();
     }
 }
@@ -217,7 +226,8 @@ fn unknown_and_broken_messages_are_answered_and_harm_nothing() {
     assert!(client.answer(again)["error"].is_object());
     for body in ["", "{", "[]", "3", "null", "{}", "{\"jsonrpc\":\"2.0\"}", "\u{0}", "\"α", &"[".repeat(100_000)] {
         client.send_raw(format!("Content-Length: {}\r\n\r\n{body}", body.len()).as_bytes());
-        let (_, answer) = client.wait("an answer to nothing", |message| message["id"].is_null() && message.get("error").is_some());
+        let (_, answer) =
+            client.wait("an answer to nothing", |message| message["id"].is_null() && message.get("error").is_some());
         assert!(answer["error"]["code"].is_number(), "{answer}");
     }
     client.send_raw(b"Content-Length: 4\r\n\r\n\xff\xfe\xff\xfe");

@@ -35,7 +35,8 @@ fn measure(lines: usize, rounds: usize) -> [Duration; 3] {
     for round in 0..rounds {
         let version = round as i64 + 2;
         let (line, column) = places[(round * 7919) % places.len()];
-        let range = json!({"start": {"line": line, "character": column}, "end": {"line": line, "character": column + 1}});
+        let range =
+            json!({"start": {"line": line, "character": column}, "end": {"line": line, "character": column + 1}});
         let digit = (round % 7 + 1).to_string();
         let position = json!({"textDocument": {"uri": URI}, "position": {"line": line, "character": column + 1}});
         let begun = Instant::now();

@@ -619,10 +619,7 @@ impl Case {
     /// The boundaries of a region.
     pub fn boundaries_of<'a>(&'a self, region: &'a Region) -> impl Iterator<Item = &'a Boundary> + 'a {
         let numbers = self.index().boundaries_of(self, &region.name.text);
-        numbers
-            .iter()
-            .filter_map(|number| self.boundaries.get(*number))
-            .filter(|boundary| boundary.region.is_some())
+        numbers.iter().filter_map(|number| self.boundaries.get(*number)).filter(|boundary| boundary.region.is_some())
     }
 
     fn index(&self) -> &Index {

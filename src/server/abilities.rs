@@ -46,10 +46,7 @@ impl Abilities {
             watches: workspace.did_change_watched_files.is_some_and(|it| yes(it.dynamic_registration)),
             progress: yes(window.work_done_progress),
             configuration: yes(workspace.configuration),
-            snippets: text
-                .completion
-                .and_then(|it| it.completion_item)
-                .is_some_and(|item| yes(item.snippet_support)),
+            snippets: text.completion.and_then(|it| it.completion_item).is_some_and(|item| yes(item.snippet_support)),
             symbol_tree: text.document_symbol.is_some_and(|it| yes(it.hierarchical_document_symbol_support)),
             code_actions: text.code_action.is_some_and(|it| it.code_action_literal_support.is_some()),
             process: params.process_id,

@@ -12,9 +12,7 @@ use crate::syntax::{FileId, Place};
 use std::collections::{BTreeSet, HashMap};
 use std::path::Path;
 use std::sync::Arc;
-use tower_lsp::lsp_types::{
-    Location, Position, PrepareRenameResponse, TextEdit, Url, WorkspaceEdit,
-};
+use tower_lsp::lsp_types::{Location, Position, PrepareRenameResponse, TextEdit, Url, WorkspaceEdit};
 
 /// Where what stands under the cursor is defined.
 pub fn definition(places: &Places<'_>, position: Position) -> Option<Vec<Location>> {
@@ -111,9 +109,9 @@ fn each_deck(
     for other in decks_with(shared, world, &files, &document.path) {
         let Ok(deck) = &other.deck else { continue };
         let places = Places::new(world, deck);
-        let targets = std::iter::once((document.path.as_path(), offset)).chain(defined.iter().filter_map(|place| {
-            Some((own_deck.file(place.file)?.path.as_path(), place.span.start))
-        }));
+        let targets = std::iter::once((document.path.as_path(), offset)).chain(
+            defined.iter().filter_map(|place| Some((own_deck.file(place.file)?.path.as_path(), place.span.start))),
+        );
         for (path, offset) in targets {
             let index = deck.files.iter().position(|file| file.path == path);
             if let Some(file) = index.and_then(|index| u32::try_from(index).ok()) {

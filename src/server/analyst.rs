@@ -45,9 +45,8 @@ pub fn run(shared: &Shared) {
 
 /// A document whose findings were not sent in its present state; the one edited last comes first.
 fn next(world: &super::world::World, sent: &Sent) -> Option<Document> {
-    let is_due = |document: &&Document| {
-        sent.get(&document.uri).is_none_or(|sent| !Arc::ptr_eq(sent, &document.worked_out))
-    };
+    let is_due =
+        |document: &&Document| sent.get(&document.uri).is_none_or(|sent| !Arc::ptr_eq(sent, &document.worked_out));
     let latest = world.latest.as_ref().and_then(|uri| world.documents.get(uri)).filter(is_due);
     latest.or_else(|| world.documents.values().find(is_due)).cloned()
 }

@@ -101,7 +101,8 @@ fn paths(places: &Places<'_>, written: &str, span: Span) -> Vec<CompletionItem> 
     let folder = own.path.parent().unwrap_or(Path::new(""));
     let (inner, begun) = written.rsplit_once('/').map_or(("", written), |(inner, begun)| (inner, begun));
     let within = normalised(&folder.join(inner));
-    let root = project_folder(&own.path, places.world.folders.iter().find(|it| own.path.starts_with(it)).map(|it| &**it));
+    let root =
+        project_folder(&own.path, places.world.folders.iter().find(|it| own.path.starts_with(it)).map(|it| &**it));
     if !within.starts_with(&root) {
         return Vec::new();
     }

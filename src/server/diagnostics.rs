@@ -126,4 +126,3 @@ pub fn without_related(diagnostics: &mut [Diagnostic]) {
         diagnostic.related_information = None;
     }
 }
-

@@ -134,7 +134,8 @@ impl State {
     fn know(&mut self, path: PathBuf, mut known: Closed) -> Option<Closed> {
         let before = self.forget(&path);
         // One copy of each path, however many decks look at it.
-        let shared = |seen: &Arc<Path>| self.users.get_key_value(seen).map_or_else(|| seen.clone(), |(it, _)| it.clone());
+        let shared =
+            |seen: &Arc<Path>| self.users.get_key_value(seen).map_or_else(|| seen.clone(), |(it, _)| it.clone());
         known.looked_at = known.looked_at.iter().map(shared).collect();
         for seen in known.looked_at.iter() {
             self.users.entry(seen.clone()).or_default().insert(path.clone());

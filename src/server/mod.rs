@@ -75,7 +75,8 @@ pub fn serve() -> io::Result<()> {
 /// # Errors
 /// As [`serve`].
 pub fn serve_on(input: impl Read + Send + 'static, output: impl Write + Send + 'static) -> io::Result<()> {
-    let runtime = tokio::runtime::Builder::new_multi_thread().worker_threads(2).max_blocking_threads(4).enable_time().build()?;
+    let runtime =
+        tokio::runtime::Builder::new_multi_thread().worker_threads(2).max_blocking_threads(4).enable_time().build()?;
     let (out, to_write) = mpsc::channel(OUTGOING);
     let shared = Arc::new(Shared::new(runtime.handle().clone(), out));
     let (ends, ended) = threads::channel();

@@ -14,10 +14,7 @@ pub fn markdown(value: String) -> Option<MarkupContent> {
 /// What stands under the cursor.
 pub fn hover(places: &Places<'_>, position: Position) -> Option<Hover> {
     let hover = ide::hover::hover(places.deck, OWN, places.offset(OWN, position)?)?;
-    Some(Hover {
-        contents: HoverContents::Markup(markdown(hover.markdown)?),
-        range: places.span(OWN, hover.span),
-    })
+    Some(Hover { contents: HoverContents::Markup(markdown(hover.markdown)?), range: places.span(OWN, hover.span) })
 }
 
 /// What the statement under the cursor takes.

@@ -14,8 +14,8 @@ use serde::de::DeserializeOwned;
 use serde_json::{Value, json};
 use std::io::{BufRead, ErrorKind};
 use std::path::PathBuf;
-use std::sync::mpsc as threads;
 use std::sync::Arc;
+use std::sync::mpsc as threads;
 use std::task::{Context, Waker};
 use tokio::sync::Semaphore;
 use tower_lsp::jsonrpc::{Request, Response};
@@ -63,7 +63,14 @@ impl Reception {
             }
         });
         let permits = Arc::new(Semaphore::new(AT_ONCE as usize));
-        Reception { shared: shared.clone(), service, answers: Box::new(answers), permits, ends, stage: Stage::BeforeInitialize }
+        Reception {
+            shared: shared.clone(),
+            service,
+            answers: Box::new(answers),
+            permits,
+            ends,
+            stage: Stage::BeforeInitialize,
+        }
     }
 
     /// Receives messages until there are no more.
@@ -119,7 +126,13 @@ impl Reception {
         let _ = self.shared.out.blocking_send(Outgoing::Message(answer.to_string().into_bytes()));
     }
 
-    fn request(&mut self, method: &str, message: Value) {
+    fn request(&mut self, method: &str, mut message: Value) {
+        // The framework refuses parameters where there are none to be, which some clients send as nothing or `{}`.
+        if method == "shutdown"
+            && let Some(fields) = message.as_object_mut()
+        {
+            fields.remove("params");
+        }
         let is_first = method == "initialize" && self.stage == Stage::BeforeInitialize;
         let params = is_first.then(|| message.get("params").cloned().unwrap_or_default());
         let Ok(request) = serde_json::from_value::<Request>(message) else {
@@ -193,9 +206,11 @@ impl Reception {
             "workspace/didChangeConfiguration" => self.with(message, Reception::configured),
             "workspace/didChangeWatchedFiles" => self.with(message, Reception::files_changed),
             "workspace/didChangeWorkspaceFolders" => self.with(message, Reception::folders_changed),
-            "window/workDoneProgress/cancel" => self.with(message, |reception, params: WorkDoneProgressCancelParams| {
-                reception.shared.folder.cancel(&params.token);
-            }),
+            "window/workDoneProgress/cancel" => {
+                self.with(message, |reception, params: WorkDoneProgressCancelParams| {
+                    reception.shared.folder.cancel(&params.token);
+                })
+            }
             // Others need no answer.
             _ => {}
         }

@@ -5,9 +5,7 @@ use super::places::Places;
 use super::shared::Shared;
 use super::world::World;
 use crate::ide::symbols::{self, Symbol, SymbolKind as Kind};
-use tower_lsp::lsp_types::{
-    DocumentSymbol, DocumentSymbolResponse, Location, SymbolInformation, SymbolKind,
-};
+use tower_lsp::lsp_types::{DocumentSymbol, DocumentSymbolResponse, Location, SymbolInformation, SymbolKind};
 
 /// Most symbols of the workspace that are given at once.
 const MOST: usize = 1000;

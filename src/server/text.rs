@@ -60,9 +60,7 @@ pub fn offset(text: &Rope, position: Position, encoding: Encoding) -> usize {
             body.try_char_to_byte(char).unwrap_or_else(|_| body.len_bytes())
         }
         Encoding::Utf16 => {
-            let char = body
-                .try_utf16_cu_to_char(column.min(body.len_utf16_cu()))
-                .unwrap_or_else(|_| body.len_chars());
+            let char = body.try_utf16_cu_to_char(column.min(body.len_utf16_cu())).unwrap_or_else(|_| body.len_chars());
             body.try_char_to_byte(char).unwrap_or_else(|_| body.len_bytes())
         }
     };

@@ -110,7 +110,9 @@ mod tests {
     fn a_stream_that_holds_no_messages_is_refused() {
         let endless_line = [b'a'].repeat(1_000_000);
         let endless_header = b"a: b\r\n".repeat(1000);
-        for stream in [&b"hello\r\n\r\n"[..], b"\r\n", b"a: b\r\n\r\n", b"\xff\xfe: 1\r\n\r\n", &endless_line, &endless_header] {
+        for stream in
+            [&b"hello\r\n\r\n"[..], b"\r\n", b"a: b\r\n\r\n", b"\xff\xfe: 1\r\n\r\n", &endless_line, &endless_header]
+        {
             assert!(all(stream).is_err(), "{:?}", stream.get(..20.min(stream.len())));
         }
     }

@@ -5,9 +5,7 @@ use super::shared::Shared;
 use std::sync::mpsc::Sender;
 use std::thread;
 use std::time::Duration;
-use tower_lsp::lsp_types::{
-    DidChangeWatchedFilesRegistrationOptions, FileSystemWatcher, GlobPattern, Registration,
-};
+use tower_lsp::lsp_types::{DidChangeWatchedFilesRegistrationOptions, FileSystemWatcher, GlobPattern, Registration};
 
 /// How often the client's process is looked for.
 const EVERY: Duration = Duration::from_secs(2);

@@ -240,7 +240,21 @@ mod tests {
 
     #[test]
     fn after_thousands_of_edits_text_and_tree_are_those_of_a_fresh_open() {
-        let pieces = ["", "x", " ", "\n", "\r\n", "\r", "α", "🌡", "e\u{301}", "given\n    T = 3 K\n", "run\n", "# c\n", "\u{2028}"];
+        let pieces = [
+            "",
+            "x",
+            " ",
+            "\n",
+            "\r\n",
+            "\r",
+            "α",
+            "🌡",
+            "e\u{301}",
+            "given\n    T = 3 K\n",
+            "run\n",
+            "# c\n",
+            "\u{2028}",
+        ];
         // Numbers that only look random (xorshift, G. Marsaglia, J. Stat. Software 8(14), 2003).
         let mut seed = 0x2545_f491_4f6c_dd1d_u64;
         let mut below = |bound: u64| {

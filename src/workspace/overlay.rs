@@ -147,9 +147,8 @@ mod tests {
 
     impl Buffers for One {
         fn buffer(&self, path: &Path) -> Option<Result<Arc<SourceFile>, Problem>> {
-            (path == self.0).then(|| {
-                Ok(Arc::new(SourceFile { path: self.0.clone(), tree: parse(self.1), text: self.1.into() }))
-            })
+            (path == self.0)
+                .then(|| Ok(Arc::new(SourceFile { path: self.0.clone(), tree: parse(self.1), text: self.1.into() })))
         }
     }
 
