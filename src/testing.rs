@@ -19,6 +19,11 @@ pub fn findings(text: &str) -> Vec<Finding> {
     analyse_text(text, TODAY).findings
 }
 
+/// The physics of the regions of a text, in their order.
+pub fn physics(text: &str) -> Vec<crate::physics::model::RegionPhysics> {
+    analyse_text(text, TODAY).physics.regions
+}
+
 /// A mark: the line (from 1), the check, and a part of the message.
 #[derive(Clone, Debug, PartialEq, Eq)]
 pub struct Mark {

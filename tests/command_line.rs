@@ -1,6 +1,6 @@
 //! The program as it is called: exit status, what goes to which stream, and what becomes of bad input.
 
-#![allow(clippy::unwrap_used, clippy::panic)]
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)]
 
 use std::fs;
 use std::io::Write;
@@ -308,4 +308,45 @@ fn watching_checks_again_when_a_deck_changes() {
     child.kill().unwrap();
     child.wait().unwrap();
     assert!(first && second && third, "{first} {second} {third}: {}", fs::read_to_string(&results).unwrap());
+}
+
+#[test]
+fn align_lays_out_and_says_what_it_changed() {
+    let folder = folder();
+    let path = folder.path().join("cell.buoy");
+    assert_eq!(status(folder.path(), &["align"]), 0);
+    let laid = fs::read_to_string(&path).unwrap();
+    let again = deckline(folder.path(), &["align", "--check"]);
+    assert_eq!((again.status.code(), text(&again.stdout)), (Some(0), String::new()));
+    let pulled = laid.replace("    side  ", "  side \t ");
+    assert_ne!(pulled, laid);
+    fs::write(&path, &pulled).unwrap();
+    let looked = deckline(folder.path(), &["align", "--check"]);
+    assert_eq!((looked.status.code(), text(&looked.stdout)), (Some(1), "./cell.buoy\n".to_string()));
+    assert_eq!(fs::read_to_string(&path).unwrap(), pulled, "`--check` changes nothing");
+    let done = deckline(folder.path(), &["align", "cell.buoy"]);
+    assert_eq!((done.status.code(), text(&done.stdout)), (Some(0), "cell.buoy\n".to_string()));
+    assert_eq!(fs::read_to_string(&path).unwrap(), laid);
+    let left: Vec<_> = fs::read_dir(folder.path()).unwrap().map(|entry| entry.unwrap().file_name()).collect();
+    assert_eq!(left.len(), 2, "{left:?}");
+}
+
+#[cfg(unix)]
+#[test]
+fn align_keeps_permissions_and_links_and_says_what_it_cannot_read() {
+    use std::os::unix::fs::PermissionsExt;
+    let folder = folder();
+    let real = folder.path().join("real.buoy");
+    fs::write(&real, "run\n  steady\n").unwrap();
+    fs::set_permissions(&real, fs::Permissions::from_mode(0o640)).unwrap();
+    std::os::unix::fs::symlink(&real, folder.path().join("link.buoy")).unwrap();
+    assert_eq!(status(folder.path(), &["align", "link.buoy"]), 0);
+    assert_eq!(fs::read_to_string(&real).unwrap(), "run\n    steady\n");
+    assert_eq!(fs::metadata(&real).unwrap().permissions().mode() & 0o777, 0o640);
+    assert!(folder.path().join("link.buoy").symlink_metadata().unwrap().file_type().is_symlink());
+    fs::write(folder.path().join("bad.buoy"), [0xff, b'\n']).unwrap();
+    let out = deckline(folder.path(), &["align", "bad.buoy", "gone.buoy"]);
+    assert_eq!(out.status.code(), Some(2));
+    let said = text(&out.stderr);
+    assert!(said.contains("bad.buoy: not UTF-8") && said.contains("gone.buoy: no such file"), "{said}");
 }

@@ -1,6 +1,8 @@
 //! Compares the correlations and scales with values from outside the project: `correlations_reference.csv`, made by
 //! `correlations_reference.py` with a reference library and with numerical solutions of the governing equations.
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)] // a test fails loudly
+
 use std::collections::BTreeMap;
 
 use deckline::physics::correlations::{

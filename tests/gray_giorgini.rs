@@ -2,8 +2,10 @@
 //!
 //! D. D. Gray and A. Giorgini, "The validity of the Boussinesq approximation for liquids and gases", Int. J. Heat Mass
 //! Transfer 19 (1976) 545-551: every criterion at most 10 %, at 15 degC and 1 atm. Recalled from the paper: air
-//! ΔT ≤ 28.6 K and H ≤ 830 m, water ΔT ≤ 1.25 K. By a reference library (CoolProp 8.0.0, see the functions below):
-//! air 28.55 K and 842 m, water 1.275 K.
+//! ΔT ≤ 28.6 K and H ≤ 830 m, water ΔT ≤ 1.25 K. By CoolProp 8.0.0 (gray_giorgini_reference.py): air 28.73 K for αΔT and
+//! 28.48 K for the change of α, 842.7 m; water 1.275 K.
+
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)] // a test fails loudly
 
 use deckline::checks::density_law::criterion::{CriterionValues, evaluate};
 use deckline::substances::{Medium, library};
@@ -81,7 +83,9 @@ fn air_is_bounded_by_its_expansion() {
     let (criterion, span) = spans[0];
     assert!(["density span", "expansion drift"].contains(&criterion), "{criterion}");
     within(span, 28.6, 0.01);
-    within(span, 28.55, 0.01);
+    let of = |name: &str| spans.iter().find(|(criterion, _)| *criterion == name).unwrap().1;
+    within(of("density span"), 28.73, 0.005);
+    within(of("expansion drift"), 28.48, 0.01);
 }
 
 #[test]
@@ -89,7 +93,7 @@ fn air_is_bounded_in_height_by_its_weight() {
     let height = height("air");
     println!("air: {height} m");
     within(height, 830.0, 0.02);
-    within(height, 842.0, 0.005);
+    within(height, 842.7, 0.002);
 }
 
 #[test]
@@ -99,7 +103,7 @@ fn water_is_bounded_by_the_change_of_its_expansion() {
     let (criterion, span) = spans[0];
     assert_eq!(criterion, "expansion drift");
     within(span, 1.25, 0.03);
-    within(span, 1.275, 0.01);
+    within(span, 1.275, 0.005);
 }
 
 #[test]

@@ -1,6 +1,6 @@
 //! Holds the language reference that a user reads (grammar/README.md) against the language.
 
-#![allow(clippy::unwrap_used, clippy::panic)]
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)]
 
 use deckline::case::sweep::SWEEP_POINTS;
 use deckline::quantity::unit_parser::LONGEST_UNIT;

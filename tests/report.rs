@@ -1,6 +1,6 @@
 //! The faces of a report, shown findings that are made by hand.
 
-#![allow(clippy::unwrap_used, clippy::panic)]
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)]
 
 use deckline::case::Resolution;
 use deckline::case::model::{Case, Name};

@@ -1,6 +1,8 @@
 //! Nothing that is typed can do harm: whatever the text, reading it ends, loses no byte, and a bad line takes no finding
 //! of another line with it.
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)] // a test fails loudly
+
 use deckline::syntax::{parse, parse_again, tokens};
 use deckline::testing::TODAY;
 use deckline::workspace::{analyse_text, walk};

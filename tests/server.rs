@@ -1,6 +1,8 @@
 //! The language server over pipes, as an editor meets it: order of edits, ends of the process, broken messages, findings
 //! that come and go.
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)] // a test fails loudly
+
 #[path = "lsp/client.rs"]
 mod client;
 #[path = "lsp/decks.rs"]
@@ -145,7 +147,7 @@ fn the_decks_of_a_folder_are_checked_with_progress_and_cleared_when_deleted() {
 #[test]
 fn settings_count_from_the_start_and_when_they_change() {
     let mut client = Client::initialized(json!({"initializationOptions": {"gate": "error"}}));
-    client.open(URI, 1, "given\n    height = 1 m\n\nregion a\n    box 1 m by 1 m by 1 m\n");
+    client.open(URI, 1, "case \"x\"\ngiven\n    height = 1 m\n");
     let (_, found) = client.findings(URI, 1);
     assert!(!codes(&found).contains(&"unused-name".to_string()), "{found}");
     client.notify("workspace/didChangeConfiguration", json!({"settings": {"deckline": {"gate": "hint"}}}));

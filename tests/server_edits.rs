@@ -1,6 +1,8 @@
 //! Thousands of rapid edits, mixed with requests, over pipes to the real program: what the server has at the end is what
 //! a fresh open of the final text gives. `DECKLINE_EDITS=20000` sets how many.
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)] // a test fails loudly
+
 #[path = "lsp/client.rs"]
 mod client;
 #[path = "lsp/decks.rs"]

@@ -2,6 +2,8 @@
 //! completion and hover sent right behind an edit. Run on an idle machine, as
 //! `cargo test --release --test server_latency -- --ignored --nocapture`.
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)] // a test fails loudly
+
 #[path = "lsp/client.rs"]
 mod client;
 #[path = "lsp/decks.rs"]

@@ -1,6 +1,8 @@
 //! The unit table against outside sources: pint (units_reference.csv, made by units_reference.py) and the printed factors of
 //! NIST SP 811, appendix B (units_sp811.csv).
 
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)] // a test fails loudly
+
 use deckline::quantity::unit::{Unit, parse_unit};
 
 /// The relative difference allowed where both sides hold the same definition: rounding only.

@@ -1,7 +1,7 @@
 //! Water and steam by IAPWS-IF97 against IAPWS-95 as two reference libraries give it
 //! (`water_reference.csv`, made by `water_reference.py`).
 
-#![allow(clippy::unwrap_used, clippy::panic)]
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)]
 
 use deckline::substances::forms::iapws_conductivity::conductivity;
 use deckline::substances::forms::iapws_if97::liquid;

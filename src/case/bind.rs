@@ -29,7 +29,7 @@ pub enum Bound {
     /// A direction, not yet of length one.
     Direction([Compiled; 3]),
     /// Three quantities.
-    Vector([BoundValue; 3]),
+    Vector(Box<[BoundValue; 3]>),
     /// A level; `None` is off.
     Level(Option<Level>),
     /// Something that does not fit, which has been reported.
@@ -332,7 +332,7 @@ fn bind_vector<'t>(
         values.push(fit(worker, word, slot, &[dimension], Temperature::Point, typed, part, base));
     }
     match <[BoundValue; 3]>::try_from(values) {
-        Ok(three) => Bound::Vector(three),
+        Ok(three) => Bound::Vector(Box::new(three)),
         Err(_) => unfit(worker, place, format!("`{word}` takes three values in brackets.")),
     }
 }

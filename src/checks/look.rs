@@ -1,9 +1,10 @@
 //! What several checks look at alike: regions with their physics, bands of estimates, and how numbers are worded.
 
 use super::check::{Subject, Weighing};
-use crate::case::model::{Boundary, Case, Region};
+use crate::case::model::{Boundary, Case, Name, Region};
 use crate::physics::model::{Bracket, RegionPhysics};
 use crate::quantity::display::format_si;
+use crate::substances::Medium;
 use crate::syntax::{Finding, Level, Margin};
 use crate::vocabulary::statements::TEMPERATURE;
 
@@ -26,6 +27,20 @@ pub fn is_fluid(region: &Region) -> bool {
 /// Whether gravity acts. Unknown gravity does not count.
 pub fn gravity_acts(case: &Case) -> bool {
     case.gravity.magnitude > 0.0
+}
+
+/// Whether the density of a region's fluid has a maximum between the temperatures that it reaches (water near 4 degC). Then
+/// a part of a layer is stable and a part is not, and one Rayleigh number does not tell.
+pub fn has_density_maximum(case: &Case, region: &Region, physics: &RegionPhysics) -> bool {
+    let change = || {
+        let fluid = case.fluid_of(region)?;
+        let medium = Medium::of(case, fluid)?;
+        let (bracket, pressure) = (physics.bracket.as_ref()?, physics.fluid.as_ref()?.pressure);
+        let low = medium.expansion(bracket.lowest.value, pressure)?;
+        let high = medium.expansion(bracket.highest.value, pressure)?;
+        Some(low * high <= 0.0)
+    };
+    change().unwrap_or(false)
 }
 
 /// Whether the run seeks a steady state.
@@ -108,6 +123,27 @@ pub fn celsius(kelvin: f64) -> String {
     format_si(kelvin, TEMPERATURE)
 }
 
+/// A sentence from its words: with a capital, where it begins with a Latin letter, and a full stop.
+pub fn sentence(words: &str) -> String {
+    let mut letters = words.chars();
+    match letters.next() {
+        Some(first) => format!("{}{}.", first.to_ascii_uppercase(), letters.as_str()),
+        None => String::new(),
+    }
+}
+
+/// A name as a sentence has it.
+pub fn named(name: &Name) -> String {
+    format!("`{}`", name.text)
+}
+
+/// A size down to two digits, so that what is advised is enough.
+pub fn rounded_down(size: f64) -> f64 {
+    let step = 10_f64.powf(size.log10().floor() - 1.0);
+    // What is whole already stays so in spite of rounding.
+    (size / step * (1.0 + 1e-12)).floor() * step
+}
+
 /// Names as a sentence has them: "`a`, `b` and `c`".
 pub fn listed(names: &[&str]) -> String {
     let quoted: Vec<String> = names.iter().map(|name| format!("`{name}`")).collect();
@@ -119,7 +155,7 @@ pub fn listed(names: &[&str]) -> String {
 }
 
 /// A finding about an entity, whose name a waiver may give.
-pub fn finding_of(check: &'static str, level: Level, name: &crate::case::model::Name, message: String) -> Finding {
+pub fn finding_of(check: &'static str, level: Level, name: &Name, message: String) -> Finding {
     Finding::new(check, level, name.place, message).about(&*name.text)
 }
 
@@ -160,6 +196,20 @@ mod tests {
         assert_eq!(level(0.5, 0.9, 1.5), None);
         assert_eq!(Weighed::given(1.2).over(&weighing), Some((Level::Warning, 1.0)));
         assert_eq!(Weighed::given(f64::NAN).over(&weighing), None);
+    }
+
+    #[test]
+    fn sentences() {
+        assert_eq!(sentence("the lid reaches 93 degC"), "The lid reaches 93 degC.");
+        assert_eq!(sentence("αΔT is 0.15"), "αΔT is 0.15.");
+        assert_eq!(sentence(""), "");
+    }
+
+    #[test]
+    fn advice_is_on_the_safe_side() {
+        assert!((rounded_down(0.002_69) - 0.0026).abs() < 1e-12);
+        assert!((rounded_down(1.8) - 1.8).abs() < 1e-9);
+        assert!(rounded_down(f64::NAN).is_nan());
     }
 
     #[test]

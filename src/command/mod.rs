@@ -1,5 +1,6 @@
 //! The command line: what may be typed, and one file a command.
 
+pub mod align;
 pub mod assess;
 pub mod basis;
 pub mod begin;
@@ -45,6 +46,8 @@ pub struct Arguments {
 pub enum Command {
     /// Check decks, and folders of decks
     Assess(assess::Arguments),
+    /// Lay decks out: white space only
+    Align(align::Arguments),
     /// Print the characteristic numbers, estimates and margins of a deck, region by region
     Numbers(numbers::Arguments),
     /// Print the technical basis of a check, or the list of the checks
@@ -76,6 +79,7 @@ pub enum Form {
 pub fn run() -> ExitCode {
     let done = match Arguments::parse().command {
         Command::Assess(arguments) => assess::run(&arguments),
+        Command::Align(arguments) => align::run(&arguments),
         Command::Numbers(arguments) => numbers::run(&arguments),
         Command::Basis(arguments) => basis::run(&arguments),
         Command::Substances(arguments) => substances::run(&arguments),

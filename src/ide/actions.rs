@@ -9,6 +9,7 @@
 use super::{name_value, remedies};
 use crate::syntax::{Edit, FileId, Finding, Span};
 use crate::workspace::Deck;
+use std::collections::BTreeMap;
 
 /// What an action is for.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
@@ -83,14 +84,19 @@ fn fixes(deck: &Deck, file: FileId, span: Span) -> Vec<Action> {
 /// Every sure remedy in a file. Of two that overlap, the first; what is left shows again afterwards.
 pub fn fix_all(deck: &Deck, file: FileId) -> Option<Action> {
     let mut edits: Vec<Edit> = Vec::new();
+    // The ranges that are changed already, by their starts: a file may hold thousands.
+    let mut taken: BTreeMap<usize, usize> = BTreeMap::new();
     let mut count = 0_usize;
     for finding in deck.findings.iter().filter(|finding| finding.place.file == file && finding.waived.is_none()) {
         // Several sure remedies of one finding would be none.
         let mut sure = finding.fixes.iter().filter(|fix| fix.sure);
         let (Some(fix), None) = (sure.next(), sure.next()) else { continue };
-        let is_free =
-            fix.edits.iter().all(|new| new.file == file && edits.iter().all(|edit| !meet(edit.span, new.span)));
-        if is_free {
+        let is_free = |span: Span| {
+            let before = taken.range(..=span.end).next_back();
+            before.is_none_or(|(_, end)| *end < span.start)
+        };
+        if fix.edits.iter().all(|new| new.file == file && is_free(new.span)) {
+            taken.extend(fix.edits.iter().map(|edit| (edit.span.start, edit.span.end)));
             edits.extend(fix.edits.iter().cloned());
             count += 1;
         }
@@ -116,7 +122,7 @@ mod tests {
 
     #[test]
     fn a_remedy_under_the_cursor_and_all_sure_ones() {
-        let (deck, offset) = at("given\n    a = 3 Mp$0a\n    b = 2*a\nregion r\n    bx 1 m by 1 m\n");
+        let (deck, offset) = at("given\n    a = 3 Mp$0a\n    b = 2*a\nregion r\n    boxx 1 m by 1 m\n");
         let all = actions(&deck, DECK, Span::new(offset, offset));
         let fix = all.iter().find(|action| action.kind == ActionKind::QuickFix).unwrap();
         assert_eq!((fix.title.as_str(), fix.resolves, fix.sure), ("Write `MPa`", Some("unknown-unit"), true));

@@ -10,69 +10,18 @@
 //! The line may be half-written: it is read up to the cursor. Everything else comes from the tree and the resolution.
 
 use super::half_line::{self, HalfLine, Piece, Typing};
-use super::names_here;
-use super::snippet::{self, names_of, plain};
+use super::offers::List;
+pub use super::offers::{Completion, CompletionKind};
+use super::snippet::{self, plain};
 use super::spot::{Spot, spot};
 use super::wanted::{self, Wanted};
-use crate::case::Resolution;
 use crate::checks::CHECKS;
-use crate::quantity::dimension_names::KINDS;
-use crate::quantity::{Dimension, parse_unit};
-use crate::substances::library::FILES;
 use crate::syntax::tree::Content;
 use crate::syntax::{FileId, Level, Span};
-use crate::vocabulary::functions::{CONSTANTS, FUNCTIONS, REGION_NUMBERS};
-use crate::vocabulary::rows::{Choice, Holds};
+use crate::vocabulary::functions::REGION_NUMBERS;
+use crate::vocabulary::rows::Holds;
 use crate::vocabulary::{self, ENTRIES, EntryKind, NameOf, Need, Slot, Takes, Times};
 use crate::workspace::Deck;
-
-/// One answer.
-#[derive(Clone, Debug, PartialEq, Eq)]
-pub struct Completion {
-    /// What the list shows.
-    pub label: String,
-    /// A few words beside it.
-    pub detail: String,
-    /// More, in Markdown; may be empty.
-    pub documentation: String,
-    /// What is inserted: a snippet, with places to fill in as `${1:..}`.
-    pub insert: String,
-    /// What it replaces, in bytes of the file.
-    pub replace: Span,
-    /// What it is.
-    pub kind: CompletionKind,
-    /// Answers stand in the order of this text.
-    pub sort: String,
-}
-
-/// What an answer is.
-#[derive(Clone, Copy, Debug, PartialEq, Eq)]
-pub enum CompletionKind {
-    /// A word that opens an entry.
-    Entry,
-    /// A word that opens a statement.
-    Statement,
-    /// A link.
-    Link,
-    /// A unit.
-    Unit,
-    /// A value with a name.
-    Value,
-    /// A member of an entry.
-    Member,
-    /// A fluid, solid, region or boundary.
-    Entity,
-    /// A substance.
-    Substance,
-    /// A word that a slot offers.
-    Choice,
-    /// A function, or a number of a region.
-    Function,
-    /// A constant.
-    Constant,
-    /// A check.
-    Check,
-}
 
 /// Everything that may stand at the cursor, the likeliest first. The path of an `include` is the caller's to complete.
 pub fn complete(deck: &Deck, file: FileId, offset: usize) -> Vec<Completion> {
@@ -97,44 +46,7 @@ pub fn complete(deck: &Deck, file: FileId, offset: usize) -> Vec<Completion> {
     list.found
 }
 
-/// The answers so far.
-struct List<'d> {
-    deck: &'d Deck,
-    resolution: &'d Resolution,
-    replace: Span,
-    found: Vec<Completion>,
-}
-
 impl List<'_> {
-    fn add(&mut self, kind: CompletionKind, label: &str, detail: &str, documentation: String, insert: String) {
-        let sort = format!("{:05}", self.found.len());
-        self.found.push(Completion {
-            label: label.to_string(),
-            detail: detail.to_string(),
-            documentation,
-            insert,
-            replace: self.replace,
-            kind,
-            sort,
-        });
-    }
-
-    fn plain(&mut self, kind: CompletionKind, label: &str, detail: &str) {
-        self.add(kind, label, detail, String::new(), plain(label));
-    }
-
-    fn units(&mut self, wanted: &Wanted, glued: bool) {
-        let mut units = wanted.units();
-        if wanted.dimensions.is_empty() {
-            units = KINDS.iter().filter_map(|kind| kind.units.first().copied()).filter(|unit| *unit != "1").collect();
-        }
-        for unit in units {
-            let words = parse_unit(unit).map_or_else(|_| String::new(), |unit| unit.dimension.words());
-            let space = if glued && !unit.starts_with(['%', '°']) { " " } else { "" };
-            self.add(CompletionKind::Unit, unit, &words, String::new(), format!("{space}{}", plain(unit)));
-        }
-    }
-
     /// Words, where no unit is being typed.
     fn words(&mut self, spot: &Spot<'_>, half: &HalfLine<'_>) {
         let Some((first, rest)) = half.pieces.split_first() else { return self.opening(spot, half.indented) };
@@ -294,71 +206,6 @@ impl List<'_> {
         }
     }
 
-    fn choices(&mut self, choices: &[Choice], taken: &[Piece<'_>]) {
-        for choice in choices.iter().filter(|choice| !taken.contains(&Piece::Word(choice.word))) {
-            self.plain(CompletionKind::Choice, choice.word, choice.description);
-        }
-    }
-
-    fn names(&mut self, of: NameOf, taken: &[Piece<'_>]) {
-        let kind = if of == NameOf::Substance { CompletionKind::Substance } else { CompletionKind::Entity };
-        for name in names_of(self.resolution, of) {
-            if !taken.contains(&Piece::Word(name)) {
-                self.plain(kind, name, of.word());
-            }
-        }
-        match of {
-            NameOf::Substance => {
-                for (name, text) in FILES {
-                    // The comment at the head of the data says what it is.
-                    let about = text.lines().next().unwrap_or("").trim_start_matches('#').trim();
-                    self.plain(CompletionKind::Substance, name, about);
-                }
-            }
-            NameOf::Anything => self.plain(CompletionKind::Entity, "case", "the whole deck"),
-            _ => {}
-        }
-    }
-
-    /// What an expression may name: values, those of a wanted dimension first, then constants and functions.
-    fn values(&mut self, spot: &Spot<'_>, wanted: &Wanted) {
-        let fits = |dimension: Dimension| wanted.dimensions.is_empty() || wanted.dimensions.contains(&dimension);
-        let scope = names_here::scope(spot, self.deck);
-        for is_fitting in [true, false] {
-            for value in scope.iter().filter(|value| fits(value.dimension) == is_fitting) {
-                self.add(
-                    CompletionKind::Value,
-                    &value.name,
-                    &value.detail,
-                    value.description.clone(),
-                    plain(&value.name),
-                );
-            }
-            for constant in CONSTANTS.iter().filter(|constant| fits(constant.dimension) == is_fitting) {
-                self.plain(CompletionKind::Constant, constant.name, constant.description);
-            }
-        }
-        for function in FUNCTIONS {
-            let insert = format!("{}(${{1:x}})", function.name);
-            self.add(CompletionKind::Function, function.name, function.description, String::new(), insert);
-        }
-    }
-
-    /// What a requirement compares.
-    fn comparands(&mut self, spot: &Spot<'_>) {
-        let regions = names_of(self.resolution, NameOf::Region);
-        let place = match regions.as_slice() {
-            [] => "${1:region}".to_string(),
-            [only] => plain(only),
-            several => format!("${{1|{}|}}", several.join(",")),
-        };
-        for number in REGION_NUMBERS {
-            let insert = format!("{}({place})", number.name);
-            self.add(CompletionKind::Function, number.name, number.description, String::new(), insert);
-        }
-        self.values(spot, &Wanted::anything());
-    }
-
     fn requirement(&mut self, spot: &Spot<'_>, half: &HalfLine<'_>) {
         // `Ra(` takes a region.
         if let [.., Piece::Word(function), Piece::Mark('(')] = half.pieces.as_slice()
@@ -390,36 +237,6 @@ impl List<'_> {
             self.add(CompletionKind::Link, "step", "the distance of two values", String::new(), "step ".into());
         }
     }
-
-    /// The members of an entry: what it states that has a value.
-    fn members(&mut self, owner: &str) {
-        for entry in &self.resolution.entries {
-            let is_owner = entry.name.as_ref().is_some_and(|name| &*name.text == owner)
-                && matches!(entry.row.kind, EntryKind::Fluid | EntryKind::Solid | EntryKind::Region);
-            if !is_owner {
-                continue;
-            }
-            for statement in &entry.statements {
-                for (index, slot) in statement.row.slots.iter().enumerate() {
-                    let is_value = matches!(slot.takes, Takes::Quantity(..)) && !self.is_empty_slot(statement, index);
-                    let name =
-                        if index == 0 && !is_shape(statement.row.slots) { statement.row.word } else { slot.name };
-                    if is_value {
-                        self.plain(CompletionKind::Member, name, statement.row.description);
-                    }
-                }
-            }
-        }
-    }
-
-    fn is_empty_slot(&self, statement: &crate::case::bind::BoundStatement, index: usize) -> bool {
-        statement.slots.get(index).is_none_or(Vec::is_empty)
-    }
-}
-
-/// Whether a statement has several values of its own names, as shapes do.
-fn is_shape(slots: &[Slot]) -> bool {
-    slots.len() > 1
 }
 
 /// What a word is called in the list: with the link that always follows it, `held at`.

@@ -99,6 +99,6 @@ mod tests {
         assert_eq!(entered("run\n    steady\n    \n$0"), "run\n    steady\n\n");
         assert_eq!(entered("include \"a.buoy\"\n$0"), "include \"a.buoy\"\n");
         assert_eq!(entered("$0"), "");
-        assert_eq!(entered("\n$0"), "\n");
+        assert_eq!(entered("# a\n$0"), "# a\n");
     }
 }

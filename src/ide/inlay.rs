@@ -9,12 +9,14 @@
 
 use super::amount::literal;
 use super::names_here::value_of;
+use crate::case::resolution::ResolvedGiven;
 use crate::physics::model::RegionPhysics;
 use crate::quantity::display::{format_difference, format_number};
 use crate::syntax::tree::{Content, Definition, PlacedEntry};
 use crate::syntax::{FileId, Place, Span};
 use crate::vocabulary::EntryKind;
 use crate::workspace::Deck;
+use std::collections::{HashMap, HashSet};
 
 /// A hint.
 #[derive(Clone, Debug, PartialEq, Eq)]
@@ -27,23 +29,35 @@ pub struct Hint {
     pub tooltip: String,
 }
 
+/// What a deck's names are, by where they are defined: looked up once, for a whole file asks for thousands.
+struct Known<'d> {
+    given: HashMap<Place, &'d ResolvedGiven>,
+    varying: HashSet<usize>,
+    regions: HashMap<Place, usize>,
+}
+
 /// The hints of the lines in `span`.
 pub fn hints(deck: &Deck, file: FileId, span: Span) -> Vec<Hint> {
     let Some(source) = deck.file(file) else { return Vec::new() };
     let entries = &source.tree.entries;
     let from = source.tree.entry_at(span.start).unwrap_or(0);
     let mut hints = Vec::new();
+    let known = Known {
+        given: deck.resolution.given.iter().map(|given| (given.name.place, given)).collect(),
+        varying: deck.resolution.varying.iter().copied().collect(),
+        regions: deck.case.regions.iter().enumerate().map(|(index, region)| (region.name.place, index)).collect(),
+    };
     for placed in entries.iter().skip(from).take_while(|placed| placed.start <= span.end) {
         let kind = placed.entry.head_phrase().and_then(|head| crate::vocabulary::entry_row(&head.word.text));
         match kind.map(|row| row.kind) {
             Some(EntryKind::Given) => {
                 for line in placed.entry.statements() {
                     if let Content::Definition(definition) = &line.content {
-                        hints.extend(of_definition(deck, file, placed, definition));
+                        hints.extend(of_definition(deck, &known, file, placed, definition));
                     }
                 }
             }
-            Some(EntryKind::Region) => hints.extend(of_region(deck, file, placed)),
+            Some(EntryKind::Region) => hints.extend(of_region(deck, &known, file, placed)),
             _ => {}
         }
     }
@@ -52,12 +66,18 @@ pub fn hints(deck: &Deck, file: FileId, span: Span) -> Vec<Hint> {
 }
 
 /// The value of a definition that is no plain literal.
-fn of_definition(deck: &Deck, file: FileId, placed: &PlacedEntry, definition: &Definition) -> Option<Hint> {
+fn of_definition(
+    deck: &Deck,
+    known: &Known<'_>,
+    file: FileId,
+    placed: &PlacedEntry,
+    definition: &Definition,
+) -> Option<Hint> {
     let value = definition.value.as_ref().filter(|value| literal(value).is_none())?;
     let place = Place::new(file, definition.name.span.shifted(placed.start));
-    let given = deck.resolution.given.iter().find(|given| given.name.place == place)?;
+    let given = *known.given.get(&place)?;
     let is_known = deck.resolution.nominal.values.get(given.number).is_some_and(|si| si.is_finite());
-    let varies = deck.resolution.varying.contains(&given.number);
+    let varies = known.varying.contains(&given.number);
     is_known.then(|| Hint {
         offset: value.span.shifted(placed.start).end,
         label: format!("= {}{}", value_of(deck, given), if varies { ", .." } else { "" }),
@@ -66,11 +86,10 @@ fn of_definition(deck: &Deck, file: FileId, placed: &PlacedEntry, definition: &D
 }
 
 /// The characteristic numbers of a region, behind its head.
-fn of_region(deck: &Deck, file: FileId, placed: &PlacedEntry) -> Option<Hint> {
+fn of_region(deck: &Deck, known: &Known<'_>, file: FileId, placed: &PlacedEntry) -> Option<Hint> {
     let head = placed.entry.head_phrase()?;
     let span = head.arguments.first()?.span.shifted(placed.start);
-    let index = deck.case.regions.iter().position(|region| region.name.place == Place::new(file, span))?;
-    let physics = deck.physics.regions.get(index)?;
+    let physics = deck.physics.regions.get(*known.regions.get(&Place::new(file, span))?)?;
     let label = numbers(physics);
     (!label.is_empty()).then(|| Hint {
         offset: head.span.shifted(placed.start).end,

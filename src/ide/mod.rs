@@ -16,6 +16,7 @@ pub mod name_value;
 pub mod names_here;
 pub mod navigate;
 pub mod numbers;
+pub mod offers;
 pub mod remedies;
 pub mod rename;
 pub mod selection;

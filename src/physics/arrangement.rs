@@ -264,3 +264,156 @@ const ALL: &[(&str, Kind)] = &[
     ("through-flow", Kind::ThroughFlow),
     ("uniform-heating", Kind::UniformHeating),
 ];
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::testing::physics;
+    use crate::vocabulary::arrangements::ARRANGEMENTS;
+
+    fn of(case: &str, region: &str, boundaries: &[(&str, &str)]) -> crate::physics::model::RegionPhysics {
+        let mut text = format!(
+            "case \"t\"\n    {case}\nfluid a\n    substance air\n    reference 20 degC\nregion r\n    {region}\n    filled with a\n"
+        );
+        for (index, (side, heat)) in boundaries.iter().enumerate() {
+            text.push_str(&format!("boundary b{index} of r\n    side {side}\n    {heat}\n"));
+        }
+        physics(&text).remove(0)
+    }
+
+    fn kind(case: &str, region: &str, boundaries: &[(&str, &str)]) -> Kind {
+        of(case, region, boundaries).arrangement.kind
+    }
+
+    const DOWN: &str = "gravity 9.81 m/s^2";
+    const HOT: &str = "held at 40 degC";
+    const COLD: &str = "held at 10 degC";
+
+    #[test]
+    fn every_word_has_its_kind() {
+        for choice in ARRANGEMENTS {
+            let kind = of_word(choice.word).unwrap();
+            assert_eq!(word(kind), choice.word);
+        }
+        assert_eq!(ARRANGEMENTS.len(), ALL.len());
+        assert_eq!(word(Kind::Unknown), "unknown");
+    }
+
+    #[test]
+    fn enclosures_by_gravity() {
+        let cube = "box 1 m by 1 m by 1 m";
+        let sides = [("west", HOT), ("east", COLD)];
+        assert_eq!(kind(DOWN, cube, &sides), Kind::SideHeatedCavity);
+        assert_eq!(kind("gravity 9.81 m/s^2 along -x", cube, &sides), Kind::LayerHeatedFromBelow);
+        assert_eq!(kind("gravity 9.81 m/s^2 along x", cube, &sides), Kind::StableLayer);
+        assert_eq!(kind("gravity 9.81 m/s^2 along (-1, 0, -1)", cube, &sides), Kind::TiltedCavity);
+        assert_eq!(kind(DOWN, cube, &[("bottom", HOT), ("top", COLD)]), Kind::LayerHeatedFromBelow);
+        assert_eq!(kind(DOWN, cube, &[("bottom", COLD), ("top", HOT)]), Kind::StableLayer);
+        assert_eq!(kind("gravity none", cube, &sides), Kind::SideHeatedCavity);
+    }
+
+    #[test]
+    fn a_stated_tilt_turns_the_hot_side() {
+        let gap = |tilt: &str| format!("gap 20 mm by 1 m\n    tilt {tilt}");
+        let hot_west = [("west", HOT), ("east", COLD)];
+        let hot_east = [("east", HOT), ("west", COLD)];
+        for (tilt, expected) in [
+            ("0 deg", Kind::LayerHeatedFromBelow),
+            ("60 deg", Kind::TiltedCavity),
+            ("90 deg", Kind::SideHeatedCavity),
+            ("180 deg", Kind::StableLayer),
+        ] {
+            assert_eq!(kind(DOWN, &gap(tilt), &hot_west), expected, "{tilt}");
+            assert_eq!(kind(DOWN, &gap(tilt), &hot_east), expected, "{tilt}");
+        }
+        let tilted = of(DOWN, &gap("30 deg"), &hot_west).geometry;
+        let height = 0.5 + 0.02 * 30_f64.to_radians().cos();
+        assert!((tilted.height - height).abs() < 1e-9 && (tilted.spacing - 0.02).abs() < 1e-12, "{tilted:?}");
+    }
+
+    #[test]
+    fn sides_that_do_not_face_each_other() {
+        let cube = "box 1 m by 1 m by 1 m";
+        assert_eq!(kind(DOWN, cube, &[("bottom", HOT), ("west", COLD)]), Kind::SideHeatedCavity);
+        assert_eq!(kind(DOWN, cube, &[("bottom", HOT), ("remaining", COLD)]), Kind::LayerHeatedFromBelow);
+        assert_eq!(kind(DOWN, cube, &[("west", HOT), ("remaining", COLD)]), Kind::SideHeatedCavity);
+        assert_eq!(kind(DOWN, cube, &[("top", HOT), ("remaining", COLD)]), Kind::SideHeatedCavity);
+        assert_eq!(kind(DOWN, cube, &[("remaining", HOT)]), Kind::UniformHeating);
+        assert_eq!(kind(DOWN, cube, &[]), Kind::UniformHeating);
+    }
+
+    #[test]
+    fn round_spaces() {
+        let ring = [("inner", HOT), ("outer", COLD)];
+        assert_eq!(kind(DOWN, "annulus 0.1 m by 0.2 m", &ring), Kind::Annulus);
+        assert_eq!(kind(DOWN, "annulus 0.1 m by 0.2 m by 1 m along x", &ring), Kind::Annulus);
+        let upright = of(DOWN, "annulus 0.1 m by 0.2 m by 1 m", &ring);
+        assert_eq!(upright.arrangement.kind, Kind::SideHeatedCavity);
+        assert!((upright.geometry.spacing - 0.05).abs() < 1e-12, "{upright:?}");
+        assert_eq!(kind(DOWN, "cylinder 1 m by 2 m", &[("bottom", HOT), ("top", COLD)]), Kind::LayerHeatedFromBelow);
+        assert_eq!(kind(DOWN, "cylinder 1 m by 2 m", &[("bottom", HOT), ("around", COLD)]), Kind::LayerHeatedFromBelow);
+        assert_eq!(kind(DOWN, "sphere 1 m", &[("around", HOT)]), Kind::UniformHeating);
+    }
+
+    #[test]
+    fn plates_and_bodies() {
+        let plate = |tilt: &str| format!("plate 0.5 m by 0.5 m\n    tilt {tilt}");
+        let hot = [("face", HOT), ("far", COLD)];
+        let cold = [("face", COLD), ("far", HOT)];
+        assert_eq!(kind(DOWN, "plate 0.5 m", &hot), Kind::VerticalPlate);
+        assert_eq!(kind(DOWN, &plate("0 deg"), &hot), Kind::PlateFacingUp);
+        assert_eq!(kind(DOWN, &plate("0 deg"), &cold), Kind::PlateFacingDown);
+        assert_eq!(kind(DOWN, &plate("180 deg"), &hot), Kind::PlateFacingDown);
+        assert_eq!(kind(DOWN, &plate("180 deg"), &cold), Kind::PlateFacingUp);
+        assert_eq!(kind(DOWN, &plate("45 deg"), &hot), Kind::InclinedPlate);
+        let facing_up = of(DOWN, &plate("0 deg"), &hot).geometry;
+        assert!((facing_up.length - 0.125).abs() < 1e-12, "area over perimeter: {facing_up:?}");
+        let stated = of(DOWN, "plate 0.5 m by 0.5 m\n    tilt 0 deg\n    length 0.2 m", &hot).geometry;
+        assert!((stated.length - 0.2).abs() < 1e-12);
+    }
+
+    #[test]
+    fn flow_through_and_channels() {
+        let cube = "box 1 m by 1 m by 1 m";
+        assert_eq!(kind(DOWN, cube, &[("west", "inlet"), ("east", "outlet")]), Kind::ThroughFlow);
+        assert_eq!(
+            kind(DOWN, "channel 10 mm by 1 m", &[("west", HOT), ("bottom, top", "opening")]),
+            Kind::VerticalChannel
+        );
+        assert_eq!(
+            kind("gravity 9.81 m/s^2 along x", "channel 10 mm by 1 m", &[("west", HOT), ("bottom, top", "opening")]),
+            Kind::ThroughFlow
+        );
+    }
+
+    #[test]
+    fn what_the_region_states_goes_before() {
+        let stated = of(DOWN, "box 1 m by 1 m by 1 m\n    arrangement stable-layer", &[("bottom", HOT), ("top", COLD)]);
+        assert_eq!(stated.arrangement.kind, Kind::StableLayer);
+        assert_eq!(stated.arrangement.why, "the region states it: arrangement stable-layer");
+    }
+
+    #[test]
+    fn cold_water_turns_layers_over() {
+        let text = |hot: &str, cold: &str| {
+            format!(
+                "fluid w\n    substance water\n    reference 2 degC\nregion r\n    box 1 m by 0.2 m\n    filled with w\n\
+                 boundary b1 of r\n    side bottom\n    held at {hot}\nboundary b2 of r\n    side top\n    held at {cold}\n"
+            )
+        };
+        let kind = |hot: &str, cold: &str| physics(&text(hot, cold)).remove(0).arrangement.kind;
+        assert_eq!(kind("3 degC", "0.5 degC"), Kind::StableLayer);
+        assert_eq!(kind("0.5 degC", "3 degC"), Kind::LayerHeatedFromBelow);
+        assert_eq!(kind("30 degC", "20 degC"), Kind::LayerHeatedFromBelow);
+    }
+
+    #[test]
+    fn sentences_use_the_names_of_the_case() {
+        let cavity = of(DOWN, "box 1 m by 1 m by 1 m", &[("west", HOT), ("east", COLD)]);
+        assert_eq!(
+            cavity.arrangement.why,
+            "boundary b0 (west) is hot and boundary b1 (east) is cold, and an upright side drives the flow, \
+             under gravity along -z"
+        );
+    }
+}

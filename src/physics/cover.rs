@@ -115,3 +115,79 @@ fn names(boundary: &Boundary, side: Side, region: &Region) -> bool {
             || region.is_surrounded && side == Side::Face && !matches!(stated.value, Side::Far | Side::Remaining)
     })
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::testing::TODAY;
+    use crate::workspace::analyse_text;
+
+    const HEAD: &str =
+        "fluid a\n    substance air\n    reference 20 degC\nregion r\n    box 2 m by 3 m by 4 m\n    filled with a\n";
+
+    fn covers(boundaries: &str, expected: &[(&str, f64)]) {
+        let deck = analyse_text(&format!("{HEAD}{boundaries}"), TODAY);
+        let region = &deck.case.regions[0];
+        for (name, area) in expected {
+            let boundary = deck.case.boundaries.iter().find(|boundary| &*boundary.name.text == *name).unwrap();
+            let got = area_of(&deck.case, region, boundary);
+            assert!((got - area).abs() < 1e-9, "{name}: {got}, not {area}");
+        }
+    }
+
+    #[test]
+    fn named_sides_and_the_rest() {
+        covers(
+            "boundary a1 of r\n    side west, east\nboundary a2 of r\n    side remaining\n",
+            &[("a1", 24.0), ("a2", 28.0)],
+        );
+    }
+
+    #[test]
+    fn a_patch_leaves_the_rest_of_its_side() {
+        covers(
+            "boundary a1 of r\n    side west\n    patch 0.5 m by 2 m\nboundary a2 of r\n    side remaining\n",
+            &[("a1", 1.0), ("a2", 51.0)],
+        );
+        covers(
+            "boundary a1 of r\n    side west\n    area 3 m^2\nboundary a2 of r\n    side west\n    area 4 m^2\n\
+             boundary a3 of r\n    side remaining\n",
+            &[("a1", 3.0), ("a2", 4.0), ("a3", 45.0)],
+        );
+        // One that covers the side whole leaves nothing of it.
+        covers(
+            "boundary a1 of r\n    side west\nboundary a2 of r\n    side west\n    area 4 m^2\n\
+             boundary a3 of r\n    side remaining\n",
+            &[("a1", 12.0), ("a2", 4.0), ("a3", 40.0)],
+        );
+    }
+
+    #[test]
+    fn sides_list_their_boundaries() {
+        let text = format!(
+            "{HEAD}boundary a1 of r\n    side west\n    patch 1 m by 1 m\nboundary a2 of r\n    side remaining\n"
+        );
+        let deck = analyse_text(&text, TODAY);
+        let sides = covered_sides(&deck.case, &deck.case.regions[0]);
+        let on = |side: Side| {
+            let (_, own) = sides.iter().find(|(known, _)| *known == side).unwrap();
+            own.iter().map(|boundary| &*boundary.name.text).collect::<Vec<_>>().join(" ")
+        };
+        assert_eq!(sides.len(), 6);
+        assert_eq!((on(Side::West).as_str(), on(Side::Top).as_str()), ("a1 a2", "a2"));
+    }
+
+    #[test]
+    fn a_body_has_a_face_and_a_far_side() {
+        let text = "fluid a\n    substance air\n    reference 20 degC\nregion r\n    sphere 1 m\n    surrounded by a\n\
+                    boundary a1 of r\n    side around\nboundary a2 of r\n    side far\n";
+        let deck = analyse_text(text, TODAY);
+        let sides = covered_sides(&deck.case, &deck.case.regions[0]);
+        assert_eq!(
+            sides.iter().map(|(side, own)| (*side, own.len())).collect::<Vec<_>>(),
+            [(Side::Face, 1), (Side::Far, 1)]
+        );
+        let area = area_of(&deck.case, &deck.case.regions[0], &deck.case.boundaries[0]);
+        assert!((area - std::f64::consts::PI).abs() < 1e-12);
+    }
+}

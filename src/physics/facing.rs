@@ -24,6 +24,7 @@ pub struct Group {
 /// Walls face one way where their mean normal is at least this long.
 const ONE_WAY: f64 = 0.9;
 
+/// The walls of a role taken together.
 pub fn group(walls: &[Wall<'_>], roles: &[Role], role: Role) -> Group {
     let mut group = Group { area: 0.0, normal: None, sides: Vec::new(), is_whole_side: false };
     let (mut mean, mut side_area) = ([0.0; 3], 0.0);

@@ -23,6 +23,8 @@ pub struct Source<'a> {
     pub medium: Option<Medium<'a>>,
     /// Pressure, Pa.
     pub pressure: f64,
+    /// Temperatures over which the substance's data hold and it neither boils nor condenses, K.
+    pub range: (f64, f64),
 }
 
 /// Properties as heat transfer needs them. `NaN` for what is not known: a deck may give ν and a alone.
@@ -78,7 +80,19 @@ pub fn source<'a>(case: &'a Case, region: &Region) -> Option<Source<'a>> {
         .flatten()
         .next()
         .map_or(STANDARD_ATMOSPHERE, |value| value.si);
-    Some(Source { fluid, index, medium: medium(case, fluid), pressure })
+    let medium = medium(case, fluid);
+    Some(Source { fluid, index, medium, pressure, range: range(medium, pressure) })
+}
+
+/// A liquid's range ends where it boils; a vapour's begins there.
+fn range(medium: Option<Medium<'_>>, pressure: f64) -> (f64, f64) {
+    let Some(medium) = medium else { return (0.0, f64::INFINITY) };
+    let (lowest, highest) = medium.range();
+    match medium.boiling(pressure) {
+        Some(boiling) if medium.is_gas() => (lowest.max(boiling), highest),
+        Some(boiling) => (lowest, highest.min(boiling)),
+        None => (lowest, highest),
+    }
 }
 
 impl Source<'_> {
@@ -86,18 +100,20 @@ impl Source<'_> {
     /// another check speaks of that, and an estimate says so.
     pub fn at(&self, temperature: f64) -> Transport {
         let base = self.medium.and_then(|medium| {
-            let (lowest, highest) = medium.range();
-            if temperature.is_nan() || lowest > highest {
+            let (lowest, highest) = self.range;
+            // `clamp` demands bounds in order and no `NaN` among them, which a deck's own substance may have.
+            if temperature.is_nan() || lowest.is_nan() || highest.is_nan() || lowest > highest {
                 return None;
             }
-            medium.properties(temperature.clamp(lowest, highest), self.pressure)
+            medium.properties(temperature.max(lowest).min(highest), self.pressure)
         });
         combine(self.fluid, base, temperature)
     }
 
     /// Whether the substance's data hold at a temperature; so do the constants of a fluid without a substance.
     pub fn holds_at(&self, temperature: f64) -> bool {
-        self.medium.is_none_or(|medium| medium.holds_at(temperature))
+        let (lowest, highest) = self.range;
+        temperature >= lowest - 1e-6 && temperature <= highest + 1e-6
     }
 
     /// Whether the properties are the same at every temperature.
@@ -181,5 +197,70 @@ fn combine(fluid: &Fluid, base: Option<Properties>, temperature: f64) -> Transpo
             &[&fluid.expansion],
         ),
         compressibility: of_base(|base| base.compressibility),
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use crate::substances::Properties;
+    use crate::testing::physics;
+
+    fn constants(fluid: &str) -> Properties {
+        let text = format!("fluid a\n    {fluid}\nregion r\n    box 1 m by 1 m by 1 m\n    filled with a\n");
+        physics(&text).remove(0).fluid.unwrap().constants
+    }
+
+    fn close(a: f64, b: f64) -> bool {
+        (a / b - 1.0).abs() < 1e-12
+    }
+
+    #[test]
+    fn the_substance_where_nothing_is_stated() {
+        let air = constants("substance air\n    reference 25 degC at 1 bar");
+        // Air at 25 degC and 1 bar by CoolProp 8.0.0: 1.16855 kg/m3, 1006.4 J/(kg K), 18.45e-6 Pa s, 0.02623 W/(m K).
+        assert!(
+            (air.density / 1.16855 - 1.0).abs() < 0.003 && (air.viscosity / 18.45e-6 - 1.0).abs() < 0.005,
+            "{air:?}"
+        );
+        assert!((air.conductivity / 0.02623 - 1.0).abs() < 0.01 && (air.heat_capacity / 1006.4 - 1.0).abs() < 0.005);
+    }
+
+    #[test]
+    fn stated_values_go_before_it() {
+        let air = constants("substance air\n    reference 25 degC at 1 bar");
+        let own = constants(
+            "substance air\n    reference 25 degC at 1 bar\n    kinematic-viscosity 2e-5 m^2/s\n    density 1.5 kg/m^3",
+        );
+        assert!(close(own.viscosity, 3e-5) && close(own.density, 1.5) && close(own.heat_capacity, air.heat_capacity));
+        let own = constants("substance air\n    reference 25 degC at 1 bar\n    diffusivity 3e-5 m^2/s");
+        assert!(close(own.diffusivity(), 3e-5) && close(own.viscosity, air.viscosity), "{own:?}");
+        let own = constants("substance air\n    reference 25 degC at 1 bar\n    prandtl 0.9");
+        assert!(close(own.prandtl(), 0.9) && close(own.viscosity, air.viscosity), "{own:?}");
+        let own =
+            constants("substance air\n    reference 25 degC at 1 bar\n    conductivity 0.03 W/m/K\n    prandtl 0.9");
+        assert!(
+            close(own.prandtl(), 0.9) && close(own.conductivity, 0.03) && close(own.density, air.density),
+            "{own:?}"
+        );
+    }
+
+    #[test]
+    fn constants_alone() {
+        let own = constants(
+            "reference 20 degC\n    density 900 kg/m^3\n    viscosity 0.1 Pa.s\n    heat-capacity 2 kJ/kg/K\n    \
+             prandtl 1000\n    expansion 7e-4 1/K",
+        );
+        assert!(
+            close(own.conductivity, 0.2) && close(own.kinematic_viscosity(), 0.1 / 900.0) && close(own.expansion, 7e-4)
+        );
+        // Viscosities of both kinds give the density.
+        let own = constants("reference 20 degC\n    viscosity 0.1 Pa.s\n    kinematic-viscosity 1e-4 m^2/s");
+        assert!(close(own.density, 1000.0) && own.conductivity.is_nan(), "{own:?}");
+    }
+
+    #[test]
+    fn an_unreadable_value_is_not_replaced() {
+        let own = constants("substance air\n    reference 25 degC\n    viscosity 1 / 0 * 1 Pa.s");
+        assert!(own.viscosity.is_nan() && own.density.is_finite(), "{own:?}");
     }
 }

@@ -234,3 +234,80 @@ pub fn area_over_perimeter(a: f64, b: f64) -> f64 {
         a * b / (2.0 * (a + b))
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::testing::physics;
+
+    fn geometry_of(case: &str, shape: &str) -> Geometry {
+        let text = format!(
+            "case \"t\"\n    {case}\nfluid a\n    substance air\n    reference 20 degC\nregion r\n    {shape}\n    filled with a\n"
+        );
+        physics(&text).remove(0).geometry
+    }
+
+    fn area(geometry: &Geometry, side: Side) -> f64 {
+        geometry.sides.iter().find(|own| own.side == side).map_or(f64::NAN, |own| own.area)
+    }
+
+    fn close(a: f64, b: f64) -> bool {
+        (a - b).abs() <= 1e-9 * b.abs().max(1e-3)
+    }
+
+    #[test]
+    fn boxes() {
+        let solid = geometry_of("gravity 9.81 m/s^2", "box 2 m by 3 m by 4 m");
+        assert!(close(solid.height, 4.0) && close(solid.volume, 24.0), "{solid:?}");
+        assert!(close(area(&solid, Side::West), 12.0) && close(area(&solid, Side::North), 8.0));
+        let total: f64 = solid.sides.iter().map(|side| side.area).sum();
+        assert!(close(total, 52.0));
+        let closed = solid.sides.iter().fold([0.0; 3], |all, side| sum(all, scaled(side.normal, side.area)));
+        assert!(length(closed) < 1e-12, "normals of a closed surface add up to nothing");
+        let plane = geometry_of("gravity 9.81 m/s^2", "box 2 m by 4 m");
+        assert!(close(plane.height, 4.0) && close(plane.volume, 8.0) && plane.sides.len() == 4, "{plane:?}");
+        assert!(close(area(&plane, Side::Bottom), 2.0) && area(&plane, Side::South).is_nan());
+    }
+
+    #[test]
+    fn height_follows_gravity() {
+        assert!(close(geometry_of("gravity 9.81 m/s^2 along x", "box 2 m by 3 m by 4 m").height, 2.0));
+        assert!(close(geometry_of("gravity 9.81 m/s^2 along -y", "box 2 m by 3 m by 4 m").height, 3.0));
+        let oblique = geometry_of("gravity 9.81 m/s^2 along (3, 0, -4)", "box 2 m by 3 m by 4 m");
+        assert!(close(oblique.height, 0.6 * 2.0 + 0.8 * 4.0), "{oblique:?}");
+        // Across the axis of a cylinder the diameter counts, along it the length.
+        assert!(close(geometry_of("gravity 9.81 m/s^2", "cylinder 0.5 m by 2 m along x").height, 0.5));
+        assert!(close(geometry_of("gravity 9.81 m/s^2", "cylinder 0.5 m by 2 m").height, 2.0));
+        // A cylinder leaning by 30 degrees: cap to cap plus its length's component.
+        let leaning = geometry_of("gravity 9.81 m/s^2 along (0.5, 0, -0.8660254037844386)", "cylinder 0.5 m by 2 m");
+        assert!(close(leaning.height, 0.5 * 0.5 + 2.0 * 0.866_025_403_784_438_6), "{leaning:?}");
+        assert!(close(geometry_of("gravity none", "box 2 m by 3 m by 4 m").height, 4.0));
+    }
+
+    #[test]
+    fn round_shapes() {
+        let ring = geometry_of("gravity 9.81 m/s^2", "annulus 0.1 m by 0.3 m");
+        assert!(close(ring.volume, PI / 4.0 * 0.08) && close(area(&ring, Side::Inner), PI * 0.1), "{ring:?}");
+        assert!(close(ring.height, 0.3) && ring.sides.len() == 2);
+        let tube = geometry_of("gravity 9.81 m/s^2", "annulus 0.1 m by 0.3 m by 2 m");
+        assert!(close(tube.height, 2.0) && close(area(&tube, Side::Outer), PI * 0.6), "{tube:?}");
+        assert!(close(area(&tube, Side::Bottom), PI / 4.0 * 0.08));
+        let ball = geometry_of("gravity 9.81 m/s^2", "sphere 0.2 m");
+        assert!(close(ball.volume, PI / 6.0 * 0.008) && close(area(&ball, Side::Around), PI * 0.04));
+        let lying = geometry_of("gravity 9.81 m/s^2", "cylinder 0.5 m by 2 m along x");
+        assert!(close(area(&lying, Side::West), PI / 16.0) && close(area(&lying, Side::Around), PI), "{lying:?}");
+    }
+
+    #[test]
+    fn plates_by_their_tilt() {
+        let plate = |tilt: &str| geometry_of("gravity 9.81 m/s^2", &format!("plate 0.5 m by 0.4 m\n    tilt {tilt}"));
+        let normal = |geometry: &Geometry| geometry.sides[0].normal;
+        assert!(close(plate("90 deg").height, 0.5) && close(area(&plate("90 deg"), Side::Face), 0.2));
+        assert!(close(plate("30 deg").height, 0.25));
+        // The fluid lies over a plate that faces up: out of it is down.
+        assert!(close(normal(&plate("0 deg"))[2], -1.0) && close(normal(&plate("180 deg"))[2], 1.0));
+        let sideways = geometry_of("gravity 9.81 m/s^2 along -x", "plate 0.5 m by 0.4 m");
+        assert!(close(sideways.sides[0].normal[0], -1.0), "{sideways:?}");
+        assert!(close(area_over_perimeter(0.2, 0.3), 0.06) && close(area_over_perimeter(0.2, f64::NAN), 0.1));
+    }
+}

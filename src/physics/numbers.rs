@@ -225,7 +225,8 @@ fn layers_and_times(question: &Question<'_>, fluid: &Transport, numbers: &mut Nu
     numbers.viscous_layer = known(scales::viscous_layer(numbers.thermal_layer, numbers.prandtl));
     let height = placement.height;
     let rise = stratification(question, numbers.difference);
-    numbers.buoyancy_frequency = (gravity * fluid.expansion.abs() * rise.max(0.0) / height).sqrt();
+    numbers.buoyancy_frequency =
+        if rise <= 0.0 { 0.0 } else { (gravity * fluid.expansion.abs() * rise / height).sqrt() };
     let along_walls = !matches!(
         placement.kind,
         Kind::LayerHeatedFromBelow | Kind::StableLayer | Kind::PlateFacingUp | Kind::PlateFacingDown | Kind::Unknown
@@ -249,5 +250,91 @@ fn stratification(question: &Question<'_>, difference: f64) -> f64 {
         (Some((bottom, top)), _) => top.si - bottom.si,
         (None, Kind::StableLayer | Kind::SideHeatedCavity) => difference,
         (None, _) => 0.0,
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use crate::physics::model::RegionPhysics;
+    use crate::physics::region_number;
+    use crate::testing::physics;
+    use crate::vocabulary::functions::REGION_NUMBERS;
+
+    fn cavity(fluid: &str, extra: &str) -> RegionPhysics {
+        let text = format!(
+            "case \"t\"\n    gravity 10 m/s^2\nfluid f\n    {fluid}\nregion r\n    box 0.1 m by 0.2 m\n    filled with f\n{extra}\
+             boundary hot of r\n    side west\n    wall\n    held at 30 degC\nboundary cold of r\n    side east\n    wall\n    held at 20 degC\n"
+        );
+        physics(&text).remove(0)
+    }
+
+    const CONSTANTS: &str =
+        "reference 25 degC\n    kinematic-viscosity 2e-5 m^2/s\n    diffusivity 4e-5 m^2/s\n    expansion 4e-3 1/K";
+
+    #[test]
+    fn by_hand() {
+        let r = cavity(CONSTANTS, "");
+        let n = &r.numbers;
+        // Ra = 10 · 4e-3 · 10 · 0.1³ / (2e-5 · 4e-5) = 5e5.
+        assert!(
+            (n.rayleigh / 5e5 - 1.0).abs() < 1e-9
+                && (n.prandtl - 0.5).abs() < 1e-12
+                && (n.grashof / 1e6 - 1.0).abs() < 1e-9
+        );
+        assert!((n.buoyant_velocity - (10.0_f64 * 4e-3 * 10.0 * 0.2).sqrt()).abs() < 1e-12);
+        assert!((n.expansion_span - 0.04).abs() < 1e-12 && (n.difference - 10.0).abs() < 1e-9);
+        // N² = g α ΔT / H; layer time H² / (a Ra_H^(1/2)) with Ra_H = 8 Ra; filling time H W / (a Ra_H^(1/4)).
+        assert!((n.buoyancy_frequency - 2_f64.sqrt()).abs() < 1e-9, "{n:?}");
+        assert!((n.boundary_layer_time - 0.04 / (4e-5 * 4e6_f64.sqrt())).abs() < 1e-6, "{n:?}");
+        assert!((n.filling_time - 0.02 / (4e-5 * 4e6_f64.powf(0.25))).abs() < 1e-6, "{n:?}");
+        assert!(
+            n.reynolds.is_nan() && n.richardson.is_nan() && n.heat_transfer_coefficient.is_nan() && n.nusselt > 1.0
+        );
+        assert!((n.thermal_layer - 0.05 / n.nusselt).abs() < 1e-12 && n.viscous_layer == n.thermal_layer);
+    }
+
+    #[test]
+    fn a_stated_length_is_the_one_of_the_numbers() {
+        let (own, stated) = (cavity(CONSTANTS, ""), cavity(CONSTANTS, "    length 0.2 m\n"));
+        assert!((stated.numbers.rayleigh / own.numbers.rayleigh - 8.0).abs() < 1e-9);
+        assert!((stated.numbers.nusselt / own.numbers.nusselt - 2.0).abs() < 1e-9, "the same heat on another length");
+        assert_eq!(stated.numbers.thermal_layer, own.numbers.thermal_layer);
+    }
+
+    #[test]
+    fn given_velocities() {
+        let lid = "boundary lid of r\n    side top\n    wall\n    moves at 0.3 m/s\n    insulated\n";
+        let r = cavity(CONSTANTS, lid);
+        assert!((r.numbers.given_velocity - 0.3).abs() < 1e-12 && (r.numbers.reynolds - 1500.0).abs() < 1e-6);
+        assert!((r.numbers.richardson - 1e6 / 1500.0_f64.powi(2)).abs() < 1e-9);
+        let start = "initial r\n    velocity (0.3 m/s, 0 m/s, 0.4 m/s)\n";
+        assert!((cavity(CONSTANTS, start).numbers.given_velocity - 0.5).abs() < 1e-12);
+    }
+
+    #[test]
+    fn an_initial_stratification_has_a_frequency() {
+        let r = cavity(CONSTANTS, "initial r\n    stratified from 20 degC to 25 degC\n");
+        assert!((r.numbers.buoyancy_frequency - (10.0_f64 * 4e-3 * 5.0 / 0.2).sqrt()).abs() < 1e-9);
+    }
+
+    #[test]
+    fn without_gravity_nothing_is_driven() {
+        let text = "case \"t\"\n    gravity none\nfluid f\n    substance air\n    reference 25 degC\nregion r\n    box 0.1 m by 0.2 m\n    filled with f\n\
+             boundary hot of r\n    side west\n    wall\n    held at 30 degC\nboundary cold of r\n    side east\n    wall\n    held at 20 degC\n";
+        let n = physics(text).remove(0).numbers;
+        assert_eq!((n.rayleigh, n.nusselt, n.buoyant_velocity), (0.0, 1.0, 0.0));
+    }
+
+    #[test]
+    fn every_name_of_the_vocabulary_is_a_number() {
+        let lid = "boundary lid of r\n    side top\n    wall\n    moves at 0.3 m/s\n    insulated\n";
+        let r = cavity("substance air\n    reference 25 degC", lid);
+        for number in REGION_NUMBERS {
+            assert!(region_number(&r, number.name).is_finite(), "{}", number.name);
+        }
+        assert!(region_number(&r, "Sh").is_nan());
+        assert!((region_number(&r, "peak_temperature") - 303.15).abs() < 1e-9);
+        assert!((region_number(&r, "lowest_temperature") - 293.15).abs() < 1e-9);
+        assert!((region_number(&r, "temperature_span") - 10.0).abs() < 1e-9);
     }
 }

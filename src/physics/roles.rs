@@ -69,3 +69,53 @@ fn range(values: impl Iterator<Item = f64>) -> (f64, f64) {
 fn differ((low, high): (f64, f64)) -> bool {
     high - low > 1e-6
 }
+
+#[cfg(test)]
+mod tests {
+    use crate::testing::physics;
+
+    /// The arrangement's sentence, which names what is hot and what is cold.
+    fn why(boundaries: &str) -> String {
+        let text = format!(
+            "fluid a\n    substance air\n    reference 20 degC\nregion r\n    box 1 m by 1 m by 1 m\n    filled with a\n{boundaries}"
+        );
+        physics(&text).remove(0).arrangement.why
+    }
+
+    fn wall(name: &str, side: &str, heat: &str) -> String {
+        format!("boundary {name} of r\n    side {side}\n    wall\n    {heat}\n")
+    }
+
+    #[test]
+    fn held_temperatures_decide() {
+        let text = wall("a1", "west", "held at 50 degC")
+            + &wall("a2", "east", "held at 10 degC")
+            + &wall("a3", "remaining", "exchanges 5 W/m^2/K with -20 degC");
+        assert!(why(&text).starts_with("boundary a1 (west) is hot and boundary a2 (east) is cold"), "{}", why(&text));
+    }
+
+    #[test]
+    fn one_between_is_neither() {
+        let text = wall("a1", "west", "held at 50 degC")
+            + &wall("a2", "east", "held at 10 degC")
+            + &wall("a3", "top, bottom", "held at 30 degC");
+        assert!(why(&text).starts_with("boundary a1 (west) is hot and boundary a2 (east) is cold"), "{}", why(&text));
+    }
+
+    #[test]
+    fn a_flux_makes_the_others_cold() {
+        let text = wall("a1", "west", "heated by 50 W/m^2") + &wall("a2", "east", "exchanges 5 W/m^2/K with 20 degC");
+        assert!(why(&text).starts_with("boundary a1 (west) is hot and boundary a2 (east) is cold"), "{}", why(&text));
+        let text = wall("a1", "west", "cooled by 50 W/m^2") + &wall("a2", "east", "exchanges 5 W/m^2/K with 20 degC");
+        assert!(why(&text).starts_with("boundary a2 (east) is hot and boundary a1 (west) is cold"), "{}", why(&text));
+    }
+
+    #[test]
+    fn a_source_makes_them_cold_too() {
+        let text = wall("a1", "remaining", "held at 20 degC") + "source s in r\n    releases 10 W\n";
+        assert_eq!(
+            why(&text),
+            "heat is released inside, and boundary a1 (6 sides) is cold: there is no pair of a hot and a cold side"
+        );
+    }
+}

@@ -93,7 +93,7 @@ pub fn serve_on(input: impl Read + Send + 'static, output: impl Write + Send + '
         let _ = ends.send(end);
     })?;
     let end = ended.recv().unwrap_or(End::ClientGone);
-    let _ = shared.runtime.block_on(async {
+    shared.runtime.block_on(async {
         let _ = tokio::time::timeout(LAST_WORDS, shared.out.send(Outgoing::End)).await;
     });
     let begun = std::time::Instant::now();

@@ -94,10 +94,16 @@ impl Reception {
     }
 
     fn receive(&mut self, body: &[u8]) -> Option<End> {
-        let Ok(message) = serde_json::from_slice::<Value>(body) else {
+        let Ok(mut message) = serde_json::from_slice::<Value>(body) else {
             self.refuse(-32700, "This message is no JSON.");
             return None;
         };
+        // Some clients send `null` where a method takes no parameters; the framework refuses that.
+        if let Some(fields) = message.as_object_mut()
+            && fields.get("params").is_some_and(Value::is_null)
+        {
+            fields.remove("params");
+        }
         let method = message.get("method").and_then(Value::as_str).unwrap_or("").to_string();
         if method.is_empty() {
             match serde_json::from_value::<Response>(message) {
@@ -126,13 +132,7 @@ impl Reception {
         let _ = self.shared.out.blocking_send(Outgoing::Message(answer.to_string().into_bytes()));
     }
 
-    fn request(&mut self, method: &str, mut message: Value) {
-        // The framework refuses parameters where there are none to be, which some clients send as nothing or `{}`.
-        if method == "shutdown"
-            && let Some(fields) = message.as_object_mut()
-        {
-            fields.remove("params");
-        }
+    fn request(&mut self, method: &str, message: Value) {
         let is_first = method == "initialize" && self.stage == Stage::BeforeInitialize;
         let params = is_first.then(|| message.get("params").cloned().unwrap_or_default());
         let Ok(request) = serde_json::from_value::<Request>(message) else {

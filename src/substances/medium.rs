@@ -3,6 +3,7 @@
 use super::forms;
 use crate::case::compiled::{Compiled, Variable};
 use crate::case::model::{Case, Fluid, Property, State, Substance};
+use std::cell::RefCell;
 
 /// Properties of a fluid at one state.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -47,11 +48,18 @@ pub struct Medium<'a> {
     pub fraction: f64,
 }
 
-/// The state at which a property is wanted.
-#[derive(Clone, Copy)]
+/// The state at which a property is wanted, and the substance's definitions as far as they were asked for there: several
+/// properties share them.
 struct At {
     temperature: f64,
     pressure: f64,
+    locals: RefCell<Vec<Option<f64>>>,
+}
+
+impl At {
+    fn new(temperature: f64, pressure: f64) -> At {
+        At { temperature, pressure, locals: RefCell::default() }
+    }
 }
 
 impl<'a> Medium<'a> {
@@ -73,7 +81,7 @@ impl<'a> Medium<'a> {
         if !self.holds_at(temperature) || !pressure.is_finite() || pressure <= 0.0 {
             return None;
         }
-        let at = At { temperature, pressure };
+        let at = &At::new(temperature, pressure);
         let substance = self.substance;
         // Without a density there is no such phase here, and no other property means anything.
         let density = self.value(substance.density.as_ref()?, Quantity::Density, at);
@@ -94,14 +102,14 @@ impl<'a> Medium<'a> {
     pub fn density(&self, temperature: f64, pressure: f64) -> Option<f64> {
         let density = self.substance.density.as_ref()?;
         (self.holds_at(temperature) && pressure > 0.0)
-            .then(|| self.value(density, Quantity::Density, At { temperature, pressure }))
+            .then(|| self.value(density, Quantity::Density, &At::new(temperature, pressure)))
             .filter(|value| value.is_finite())
     }
 
     /// α, 1/K; `None` outside the range of the data.
     pub fn expansion(&self, temperature: f64, pressure: f64) -> Option<f64> {
         (self.holds_at(temperature) && pressure > 0.0)
-            .then(|| self.expansion_at(At { temperature, pressure }))
+            .then(|| self.expansion_at(&At::new(temperature, pressure)))
             .filter(|value| value.is_finite())
     }
 
@@ -125,18 +133,16 @@ impl<'a> Medium<'a> {
     /// Boiling temperature at a pressure, K.
     pub fn boiling(&self, pressure: f64) -> Option<f64> {
         let boils = self.substance.boils.as_ref()?;
-        Some(self.value(boils, Quantity::Boiling, At { temperature: f64::NAN, pressure }))
-            .filter(|value| value.is_finite())
+        Some(self.value(boils, Quantity::Boiling, &At::new(f64::NAN, pressure))).filter(|value| value.is_finite())
     }
 
     /// Freezing temperature at a pressure, K.
     pub fn freezing(&self, pressure: f64) -> Option<f64> {
         let freezes = self.substance.freezes.as_ref()?;
-        Some(self.value(freezes, Quantity::Freezing, At { temperature: f64::NAN, pressure }))
-            .filter(|value| value.is_finite())
+        Some(self.value(freezes, Quantity::Freezing, &At::new(f64::NAN, pressure))).filter(|value| value.is_finite())
     }
 
-    fn expansion_at(&self, at: At) -> f64 {
+    fn expansion_at(&self, at: &At) -> f64 {
         if let Some(expansion) = &self.substance.expansion {
             return self.value(expansion, Quantity::Expansion, at);
         }
@@ -145,14 +151,14 @@ impl<'a> Medium<'a> {
             Some(density) => {
                 // Central difference. At 1e-4 T its own error is below 1e-7 of α for every smooth form.
                 let step = 1e-4 * at.temperature;
-                let rho = |temperature| self.value(density, Quantity::Density, At { temperature, ..at });
+                let rho = |temperature| self.value(density, Quantity::Density, &At::new(temperature, at.pressure));
                 -(rho(at.temperature + step) - rho(at.temperature - step)) / (2.0 * step * rho(at.temperature))
             }
             None => f64::NAN,
         }
     }
 
-    fn compressibility_at(&self, at: At) -> f64 {
+    fn compressibility_at(&self, at: &At) -> f64 {
         if let Some(compressibility) = &self.substance.compressibility {
             return self.value(compressibility, Quantity::Compressibility, at);
         }
@@ -160,18 +166,20 @@ impl<'a> Medium<'a> {
             Some(Property::Code(form)) => forms::code(form, Quantity::Compressibility, at.temperature, at.pressure),
             Some(density) => {
                 let step = 1e-4 * at.pressure;
-                let rho = |pressure| self.value(density, Quantity::Density, At { pressure, ..at });
-                (rho(at.pressure + step) - rho(at.pressure - step)) / (2.0 * step * rho(at.pressure))
+                let rho = |pressure| self.value(density, Quantity::Density, &At::new(at.temperature, pressure));
+                let slope = (rho(at.pressure + step) - rho(at.pressure - step)) / (2.0 * step * rho(at.pressure));
+                // A density that does not know of pressure says nothing of compressibility.
+                if slope == 0.0 { f64::NAN } else { slope }
             }
             None => f64::NAN,
         }
     }
 
-    fn optional(&self, property: &Option<Property>, quantity: Quantity, at: At) -> f64 {
+    fn optional(&self, property: &Option<Property>, quantity: Quantity, at: &At) -> f64 {
         property.as_ref().map_or(f64::NAN, |property| self.value(property, quantity, at))
     }
 
-    fn value(&self, property: &Property, quantity: Quantity, at: At) -> f64 {
+    fn value(&self, property: &Property, quantity: Quantity, at: &At) -> f64 {
         match property {
             Property::Expression(expression) => self.evaluate(expression, at),
             Property::Code(form) => forms::code(form, quantity, at.temperature, at.pressure),
@@ -179,17 +187,30 @@ impl<'a> Medium<'a> {
         }
     }
 
-    fn evaluate(&self, expression: &Compiled, at: At) -> f64 {
+    fn evaluate(&self, expression: &Compiled, at: &At) -> f64 {
         expression.value(&|variable| match variable {
             Variable::Temperature => at.temperature,
             Variable::Pressure => at.pressure,
             Variable::Fraction => self.fraction,
             // A definition refers to earlier ones only, so this ends.
-            Variable::Local(index) => {
-                self.substance.locals.get(*index).map_or(f64::NAN, |local| self.evaluate(local, at))
-            }
+            Variable::Local(index) => self.local(*index, at),
             Variable::Given(_) | Variable::Deviation(_) | Variable::RegionNumber(..) => f64::NAN,
         })
+    }
+
+    fn local(&self, index: usize, at: &At) -> f64 {
+        if let Some(Some(known)) = at.locals.borrow().get(index) {
+            return *known;
+        }
+        let value = self.substance.locals.get(index).map_or(f64::NAN, |local| self.evaluate(local, at));
+        let mut locals = at.locals.borrow_mut();
+        if locals.len() <= index {
+            locals.resize(self.substance.locals.len().max(index + 1), None);
+        }
+        if let Some(slot) = locals.get_mut(index) {
+            *slot = Some(value);
+        }
+        value
     }
 }
 

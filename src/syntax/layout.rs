@@ -54,13 +54,13 @@ fn entry_changes(entry: &Entry, next: Option<&Entry>, line_end: &str) -> Vec<(Sp
         return Vec::new();
     }
     let columns = Columns::of(entry);
-    let last_written = entry.lines.iter().rposition(|line| !is_empty(line)).unwrap_or(0);
+    let last_written = entry.lines.iter().rposition(|line| !is_empty(entry, line)).unwrap_or(0);
     let mut changes = Vec::new();
     let mut after_empty = false;
     for (index, line) in entry.lines.iter().enumerate() {
         let whole = line.span.of(&entry.text);
-        let is_dropped = is_empty(line) && (after_empty || (next.is_none() && index > last_written));
-        after_empty = is_empty(line);
+        let is_dropped = is_empty(entry, line) && (after_empty || (next.is_none() && index > last_written));
+        after_empty = is_empty(entry, line);
         if is_dropped {
             changes.push((line.span, String::new()));
             continue;
@@ -73,7 +73,7 @@ fn entry_changes(entry: &Entry, next: Option<&Entry>, line_end: &str) -> Vec<(Sp
         }
         new.push_str(&end);
         let is_last = index + 1 == entry.lines.len();
-        if is_last && !is_empty(line) && next.is_some_and(|next| stands_apart(entry, next)) {
+        if is_last && !is_empty(entry, line) && next.is_some_and(|next| stands_apart(entry, next)) {
             new.push_str(line_end);
         }
         if new != whole {
@@ -85,12 +85,16 @@ fn entry_changes(entry: &Entry, next: Option<&Entry>, line_end: &str) -> Vec<(Sp
 
 /// Whether an empty line stands between two entries: it does where one of them has statements.
 fn stands_apart(entry: &Entry, next: &Entry) -> bool {
-    let has_statements = |entry: &Entry| entry.statements().any(|line| !is_empty(line));
+    let has_statements = |entry: &Entry| entry.statements().any(|line| !is_empty(entry, line));
     next.head.is_some() && (has_statements(entry) || has_statements(next))
 }
 
-fn is_empty(line: &Line) -> bool {
-    line.content == Content::Blank && line.comment.is_none() && line.problem.is_none()
+/// Whether a line holds nothing at all; a byte-order mark is something.
+fn is_empty(entry: &Entry, line: &Line) -> bool {
+    line.content == Content::Blank
+        && line.comment.is_none()
+        && line.problem.is_none()
+        && !line.span.of(&entry.text).starts_with('\u{feff}')
 }
 
 /// The change without the text that stays at its two ends, so that a cursor there is not moved.
@@ -172,19 +176,22 @@ fn laid_line(entry: &Entry, index: usize, line: &Line, columns: &Columns) -> Opt
     let whole = line.span.of(&entry.text);
     let comment = line.comment.map(|span| span.of(&entry.text).trim_end());
     let is_head = entry.head == Some(index);
+    // A byte-order mark stays where it is.
+    let unmarked = whole.trim_start_matches('\u{feff}');
+    let mark = whole.get(..whole.len() - unmarked.len()).unwrap_or("");
     if line.content == Content::Blank {
         // A comment in the first column stays there: it may describe the entry below it.
-        let stays = whole.trim_start_matches('\u{feff}').starts_with('#');
-        let mark = if whole.starts_with('\u{feff}') { "\u{feff}" } else { "" };
-        let indent = if stays { 0 } else { INDENT };
-        return Some(comment.map_or_else(String::new, |comment| format!("{mark}{}{comment}", " ".repeat(indent))));
+        let indent = if unmarked.starts_with('#') { 0 } else { INDENT };
+        return Some(match comment {
+            Some(comment) => format!("{mark}{}{comment}", " ".repeat(indent)),
+            None => mark.to_string(),
+        });
     }
     let (mut laid, comment_column) = if is_head {
         let Content::Phrase(phrase) = &line.content else { return None };
-        let mark = if whole.starts_with('\u{feff}') { "\u{feff}" } else { "" };
         (format!("{mark}{}", gathered(phrase.span.of(&entry.text))), 0)
     } else {
-        (format!("{}{}", " ".repeat(INDENT), content(entry, line, columns)?), INDENT + columns.comment)
+        (format!("{mark}{}{}", " ".repeat(INDENT), content(entry, line, columns)?), INDENT + columns.comment)
     };
     if let Some(comment) = comment {
         let width = laid.trim_start_matches('\u{feff}').width();
@@ -291,5 +298,25 @@ fn gathered(text: &str) -> String {
 }
 
 #[cfg(test)]
-#[path = "layout_tests.rs"]
-mod tests;
+mod tests {
+    use super::*;
+
+    #[test]
+    fn columns_by_entry() {
+        assert_eq!(
+            laid_out("fluid  f\n  substance air\n  kinematic-viscosity   1e-5 m^2/s\nrun\n\tsteady\n"),
+            "fluid f\n    substance            air\n    kinematic-viscosity  1e-5 m^2/s\n\nrun\n    steady\n"
+        );
+    }
+
+    #[test]
+    fn a_change_is_as_small_as_can_be() {
+        let text = "run\n    steady \n";
+        assert_eq!(changes(text, &parse(text)), [(Span::new(14, 15), String::new())]);
+    }
+
+    #[test]
+    fn white_space_in_quotes_stays() {
+        assert_eq!(gathered("a  \"b  c\"   d"), "a \"b  c\" d");
+    }
+}

@@ -47,7 +47,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         let mut finding = finding_of(CHECK.name, level, &region.name, message).remedy(if axis == Axis::Y {
             format!("gravity along -z, or {depth}")
         } else {
-            format!("another `axis`, or {depth}")
+            format!("`along y` for its axis, or {depth}")
         });
         if let Some(place) = gravity.place {
             finding = finding.related(place, "gravity");
@@ -120,8 +120,7 @@ region slab  #! gravity-out-of-plane "71 %"
     box 1 m by 2 m
     filled with a
 region ring  #! gravity-out-of-plane
-    annulus 0.1 m by 0.2 m
-    axis z
+    annulus 0.1 m by 0.2 m along z
     filled with a
 "##,
         );
@@ -140,8 +139,7 @@ region slab
     box 1 m by 2 m
     filled with a
 region ring
-    annulus 0.1 m by 0.2 m
-    axis y
+    annulus 0.1 m by 0.2 m along y
     filled with a
 "##,
         );

@@ -107,6 +107,9 @@ region room
 boundary door of room  #! no-backflow-temperature "back in at the outlet `door`"
     side west
     outlet
+boundary panel of room
+    side east
+    held at 40 degC
 boundary hatch of room
     side top
     inlet

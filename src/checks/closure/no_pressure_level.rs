@@ -65,7 +65,8 @@ fn of_fluid(case: &Case, fluid: &Fluid, level: Level) -> Option<Finding> {
             "The density of `{}` follows the pressure, and no pressure is given: 101.3 kPa is taken.",
             fluid.name.text
         );
-        finding_of(CHECK.name, level, &fluid.name, message)
+        // The pressure that is taken is the usual one.
+        finding_of(CHECK.name, level.milder(), &fluid.name, message)
             .remedy("`reference` a temperature `at` a pressure, or `ambient` with a pressure")
             .related(law.place, "its density law")
     })

@@ -1,7 +1,7 @@
 //! `side-not-of-shape`: a boundary on a side that the region's shape does not have.
 
 use super::sides::{sides_of, word};
-use crate::case::model::{Region, Shape, Side};
+use crate::case::model::{Case, Region, Shape, Side};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
 use crate::checks::look::listed;
 use crate::syntax::{Finding, Level};
@@ -32,7 +32,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         for boundary in subject.case.boundaries_of(region) {
             for stated in &boundary.sides {
                 let side = stated.value;
-                if side == Side::Remaining || sides.contains(&side) || is_face_of_body(region, side) {
+                if has(region, &sides, side) {
                     continue;
                 }
                 let message =
@@ -40,13 +40,32 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
                 findings.push(
                     Finding::new(CHECK.name, weighing.level, stated.place, message)
                         .about(&*boundary.name.text)
-                        .remedy(format!("one of {}, or `remaining`", listed(&words)))
+                        .remedy(remedy(region, side, &words))
                         .related(region.shape_place.unwrap_or(region.name.place), "its shape"),
                 );
             }
         }
     }
     findings
+}
+
+fn remedy(region: &Region, side: Side, words: &[&str]) -> String {
+    let may_be_body = matches!(region.shape, Some(Shape::Cylinder { .. } | Shape::Sphere { .. } | Shape::Box { .. }));
+    match (&region.filled_with, side) {
+        (Some(fluid), Side::Face | Side::Far) if may_be_body => {
+            format!("`surrounded by {}` where the fluid lies around it; else one of {}", fluid.text, listed(words))
+        }
+        _ => format!("one of {}, or `remaining`", listed(words)),
+    }
+}
+
+/// Whether a boundary of the region names a side that its shape does not have.
+pub fn names_others(case: &Case, region: &Region, sides: &[Side]) -> bool {
+    case.boundaries_of(region).flat_map(|boundary| &boundary.sides).any(|stated| !has(region, sides, stated.value))
+}
+
+fn has(region: &Region, sides: &[Side], side: Side) -> bool {
+    side == Side::Remaining || sides.contains(&side) || is_face_of_body(region, side)
 }
 
 /// The face of a body in a wide fluid may be called as the shape itself has it.

@@ -1,7 +1,8 @@
 //! `side-unassigned`: a part of a region's surface that no boundary covers.
 
 use super::parts::add_entry;
-use super::sides::{is_partial, names, sides_to_assign, stated_area, word};
+use super::side_not_of_shape::names_others;
+use super::sides::{is_partial, names, sides_of, sides_to_assign, stated_area, word};
 use crate::case::model::{Boundary, Case, Region, Side};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
 use crate::checks::look::{finding_of, listed};
@@ -32,6 +33,11 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
 
 fn of_region(case: &Case, region: &Region, level: Level) -> Option<Finding> {
     if case.boundaries_of(region).any(|boundary| names(boundary, Side::Remaining)) {
+        return None;
+    }
+    // A boundary on a side that is not there is meant for one of those left over: `side-not-of-shape` says so.
+    let all: Vec<Side> = sides_of(case, region).iter().map(|of| of.side).collect();
+    if names_others(case, region, &all) {
         return None;
     }
     let name = &region.name.text;
@@ -119,8 +125,7 @@ region bare  #! side-unassigned "has no boundary"
     box 1 m by 2 m
     filled with a
 region pipe  #! side-unassigned "`far`"
-    cylinder 50 mm by 2 m
-    axis x
+    cylinder 50 mm by 2 m along x
     surrounded by a
 boundary skin of pipe
     side face
@@ -155,8 +160,7 @@ boundary cold of pane
     side east
     held at 0 degC
 region can
-    cylinder 1 m by 2 m
-    axis x
+    cylinder 1 m by 2 m along x
     filled with a
 boundary mantle of can
     side around

@@ -1,7 +1,8 @@
 //! `adiabatic-lapse`: the work of pressure against the heat that is carried by convection.
 
-use super::assess::{Said, Weighed};
+use super::assess::{Said, Weighed, three_digits};
 use super::{criterion::CriterionValues, remedy};
+use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::display::{format_difference, format_number};
 use crate::syntax::{Edit, Finding, Fix, Level, Span};
@@ -43,9 +44,9 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         message: format!(
             "fluid that rises the {} m of {} cools by {} as it expands, {} of the {} that drive the flow; the Boussinesq energy equation leaves that out and is held to {}",
             format_number(region.conditions.height),
-            region.region.name.text,
+            named(&region.region.name),
             format_difference(value * region.bracket.span()),
-            format_number(value),
+            three_digits(value),
             format_difference(region.bracket.span()),
             format_number(limit),
         ),

@@ -3,12 +3,13 @@
 
 use super::criterion::{Conditions, CriterionValues, evaluate_at, of_constants};
 use crate::case::model::{Case, DensityLaw, Fluid, Region};
+pub use crate::checks::look::celsius as temperature;
+use crate::checks::look::sentence;
 use crate::checks::properties::slip::is_slip_of_bound;
 use crate::checks::properties::slip_of_state;
 use crate::checks::{Check, Subject, Weighing};
 use crate::physics::model::{Bracket, RegionPhysics};
-use crate::quantity::dimension_names::TEMPERATURE;
-use crate::quantity::display::{format_number, format_si};
+use crate::quantity::display::format_number;
 use crate::substances::{Medium, Properties};
 use crate::syntax::{Finding, Fix, Level, Margin, Place};
 
@@ -190,7 +191,7 @@ impl Weighed {
                 band: weight.band,
                 unit: String::new(),
             };
-            let mut finding = Finding::new(self.check.name, level, region.place(), message)
+            let mut finding = Finding::new(self.check.name, level, region.place(), sentence(&message))
                 .remedy(remedy)
                 .about(&*region.region.name.text)
                 .weighing(margin);
@@ -230,16 +231,11 @@ fn rests_on(bracket: &Bracket, weight: &Weight) -> String {
             bound.set_by,
             temperature(bound.band.0),
             temperature(bound.band.1),
-            format_number(least),
-            format_number(greatest)
+            three_digits(least),
+            three_digits(greatest)
         ),
         _ => String::new(),
     }
-}
-
-/// A temperature as people read it.
-pub fn temperature(kelvin: f64) -> String {
-    format_si(kelvin, TEMPERATURE)
 }
 
 /// The same to a tenth of a degree Celsius, for a property of the substance that is known no better.
@@ -255,6 +251,47 @@ pub fn per_cent(share: f64) -> String {
 
 /// A number to two or, from 100 on, three digits.
 pub fn two_digits(value: f64) -> String {
-    let digits = if value.abs() >= 100.0 { 2 } else { 1 };
-    format!("{value:.digits$e}").parse().map_or_else(|_| format_number(value), |rounded: f64| format_number(rounded))
+    rounded_to(if value.abs() >= 100.0 { 3 } else { 2 }, value)
+}
+
+/// A number to three digits.
+pub fn three_digits(value: f64) -> String {
+    rounded_to(3, value)
+}
+
+fn rounded_to(digits: usize, value: f64) -> String {
+    let places = digits.saturating_sub(1);
+    format!("{value:.places$e}").parse().map_or_else(|_| format_number(value), |rounded: f64| format_number(rounded))
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    fn limits() -> Weighing {
+        Weighing { limits: vec![(Level::Warning, 0.1), (Level::Error, 0.2)], level: Level::Warning }
+    }
+
+    #[test]
+    fn an_estimate_is_a_level_milder_unless_its_whole_band_is_over() {
+        let level = |value, band| weight(value, band, &limits()).over.map(|(level, _)| level);
+        assert_eq!(level(0.15, None), Some(Level::Warning));
+        assert_eq!(level(0.15, Some((0.12, 0.18))), Some(Level::Warning));
+        assert_eq!(level(0.15, Some((0.08, 0.22))), Some(Level::Information));
+        assert_eq!(level(0.25, Some((0.15, 0.35))), Some(Level::Warning));
+        assert_eq!(level(0.09, Some((0.05, 0.3))), None);
+        assert_eq!(level(f64::NAN, None), None);
+        assert_eq!(level(f64::NAN, Some((f64::NAN, f64::NAN))), None);
+    }
+
+    #[test]
+    fn shares_are_written_short() {
+        assert_eq!(per_cent(0.3124), "31 %");
+        assert_eq!(per_cent(0.0512), "5.1 %");
+        assert_eq!(per_cent(6.374), "637 %");
+        assert_eq!(two_digits(0.15093), "0.15");
+        assert_eq!(two_digits(47.3), "47");
+        assert_eq!(two_digits(107.4), "107");
+        assert_eq!(three_digits(0.15093), "0.151");
+    }
 }

@@ -1,10 +1,11 @@
 //! `buoyancy-error`: by how much the linear law misstates the driving force.
 
-use super::assess::{Said, Weighed, per_cent, temperature};
+use super::assess::{Said, Weighed, per_cent, temperature, three_digits};
 use super::criterion::{CriterionValues, Sample};
 use super::remedy;
+use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
-use crate::quantity::display::format_difference;
+use crate::quantity::display::{format_difference, format_number};
 use crate::substances::Properties;
 use crate::syntax::{Finding, Level};
 
@@ -72,7 +73,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         let ends = [(&bracket.lowest, "goes down to"), (&bracket.highest, "reaches")];
         let end = ends.into_iter().find(|(bound, _)| (bound.value - at).abs() < 1e-6);
         let place = end.map_or_else(
-            || format!("{} comes to {}", region.region.name.text, temperature(at)),
+            || format!("{} comes to {}", named(&region.region.name), temperature(at)),
             |(bound, verb)| format!("{} {verb} {}", bound.set_by, temperature(at)),
         );
         let side = if at >= reference { "above" } else { "below" };
@@ -95,10 +96,11 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         });
         Said {
             message: format!(
-                "{place}, {} {side} the reference of {}: {off}; it is held to {}",
+                "{place}, {} {side} the reference of {}: {off}; the error, {}, is held to {}",
                 format_difference((at - reference).abs()),
-                region.fluid.name.text,
-                per_cent(limit),
+                named(&region.fluid.name),
+                three_digits(value),
+                format_number(limit),
             ),
             remedy: remedy::join(&[Some(remedy::by_other_law(region)), centred, remedy::narrower(region, PICK, first)]),
             fixes: move_reference.into_iter().chain(remedy::to_other_law(region)).collect(),
@@ -119,7 +121,7 @@ mod tests {
 fluid content
     substance   water
     reference   40 degC
-    density-law boussinesq   #! buoyancy-error "53 K above the reference of content: buoyancy there is 43 % more than the linear law gives"
+    density-law boussinesq   #! buoyancy-error "53 K above the reference of `content`: buoyancy there is 43 % more than the linear law gives"
 region tank
     box         0.5 m by 0.6 m by 1.1 m
     filled with content
@@ -204,6 +206,72 @@ boundary cool of tank
     side        east
     wall
     held at     40 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn a_constant_density_beside_an_expansion_is_one_for_the_reference() {
+        expect_of(
+            CHECK.name,
+            r##"
+substance my_oil
+    state         liquid
+    valid         from 0 degC to 100 degC
+    density       900 kg/m^3
+    expansion     9e-4 1/K
+    heat-capacity 1.5 kJ/kg/K
+    conductivity  0.15 W/m/K
+    viscosity     0.1 Pa.s
+
+fluid content
+    substance   my_oil
+    reference   30 degC
+    density-law boussinesq
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn an_expansion_that_rises_beside_it() {
+        expect_of(
+            CHECK.name,
+            r##"
+substance my_oil
+    state         liquid
+    valid         from 0 degC to 100 degC
+    density       900 kg/m^3
+    expansion     9e-4 1/K + 3e-5 1/K^2 * (T - 293.15 K)
+    heat-capacity 1.5 kJ/kg/K
+    conductivity  0.15 W/m/K
+    viscosity     0.1 Pa.s
+
+fluid content
+    substance   my_oil
+    reference   20 degC
+    density-law boussinesq   #! buoyancy-error "32 % more"
+region tank
+    box         0.5 m by 0.6 m by 1.1 m
+    filled with content
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     20 degC
 "##,
         );
     }

@@ -4,6 +4,7 @@ use super::assess::{Assessed, Said, Weighed, per_cent, temperature};
 use super::criterion::CriterionValues;
 use super::remedy;
 use crate::case::model::{BoundaryKind, Case, Region, Shape};
+use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::display::format_si;
 use crate::syntax::{Finding, Level};
@@ -65,7 +66,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         Said {
             message: format!(
                 "{} seals its gas in, at {} and {}, and comes to {} in the mean: the pressure {} by {}, to {}, which no constant-density law shows; this is held to {}",
-                region.region.name.text,
+                named(&region.region.name),
                 temperature(reference),
                 pressure(region.conditions.pressure),
                 temperature(mean),

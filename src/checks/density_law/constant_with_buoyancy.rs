@@ -3,6 +3,7 @@
 use super::assess::{Assessed, assessed, temperature, with_ends};
 use super::remedy;
 use crate::case::model::DensityLaw;
+use crate::checks::look::sentence;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::physics::model::ArrangementKind;
 use crate::quantity::display::format_number;
@@ -58,13 +59,13 @@ fn finding(region: &Assessed<'_>, weighing: &Weighing) -> Option<Finding> {
     let level = if region.bracket.rests_on_estimate() { level.milder() } else { level };
     let bracket = region.bracket;
     let message = format!(
-        "density-law constant leaves buoyancy out of {name}, where gravity acts between {} and {}; {what}",
+        "density-law constant leaves buoyancy out of `{name}`, where gravity acts between {} and {}; {what}",
         temperature(bracket.lowest.value),
         temperature(bracket.highest.value),
     );
     let (quantity, value, limit) = margin;
-    let mut finding = Finding::new(CHECK.name, level, law.place, message)
-        .remedy("`density-law boussinesq`, or `gravity none` where buoyancy is left out on purpose.")
+    let mut finding = Finding::new(CHECK.name, level, law.place, sentence(&message))
+        .remedy("`density-law boussinesq`, or `gravity none` where buoyancy is left out on purpose")
         .about(&**name)
         .weighing(Margin { quantity: quantity.to_string(), value, limit, band: None, unit: String::new() });
     finding.fixes.push(remedy::change_law(law, DensityLaw::Boussinesq, false));

@@ -86,3 +86,64 @@ fn of_region(subject: &Subject<'_>, region: &Assessed<'_>) -> Vec<Criterion> {
     let maximum = criterion(&density_maximum::CHECK, "−α_least/α_greatest", reversal, None, limits, turns);
     weighed.chain(std::iter::once(Criterion { margin_left: f64::NAN, ..maximum })).collect()
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::testing::TODAY;
+    use crate::workspace::analyse::analyse_text;
+
+    const TANK: &str = r##"
+fluid bath
+    substance   water
+    reference   25 degC
+    density-law boussinesq
+region tank
+    box         0.1 m by 0.1 m by 0.1 m
+    filled with bath
+boundary warm of tank
+    side        west
+    wall
+    held at     40 degC
+boundary cool of tank
+    side        east
+    wall
+    held at     10 degC
+"##;
+
+    fn of(text: &str, laws: &[DensityLaw]) -> Vec<Criterion> {
+        let deck = analyse_text(text, TODAY);
+        of_laws(&Subject { case: &deck.case, physics: &deck.physics, today: TODAY }, laws)
+    }
+
+    #[test]
+    fn every_number_is_listed_once_with_its_limits() {
+        let criteria = of(TANK, &[DensityLaw::Boussinesq]);
+        let names: Vec<&str> = criteria.iter().map(|criterion| criterion.check.name).collect();
+        assert_eq!(names.len(), NUMBERS.len() + 1);
+        assert!(names.iter().enumerate().all(|(index, name)| !names[..index].contains(name)));
+        assert!(criteria.iter().all(|criterion| !criterion.limits.is_empty() && criterion.region == "tank"));
+    }
+
+    #[test]
+    fn a_criterion_agrees_with_its_check() {
+        let findings = crate::testing::findings(TANK);
+        for criterion in of(TANK, &[DensityLaw::Boussinesq]) {
+            let found = findings.iter().find(|finding| finding.check == criterion.check.name);
+            assert_eq!(found.map(|finding| finding.level), criterion.level, "{}", criterion.check.name);
+            if let Some(margin) = found.and_then(|finding| finding.margin.as_ref()) {
+                assert_eq!(margin.value, criterion.value);
+                assert!(criterion.margin_left < 0.0);
+            }
+        }
+    }
+
+    #[test]
+    fn under_another_law_they_are_what_the_linear_one_would_meet() {
+        let variable = TANK.replace("boussinesq", "variable");
+        assert!(of(&variable, &[DensityLaw::Boussinesq]).is_empty());
+        let (linear, other) = (of(TANK, &[DensityLaw::Boussinesq]), of(&variable, &[DensityLaw::Variable]));
+        let same = |a: f64, b: f64| a == b || (a.is_nan() && b.is_nan());
+        assert!(linear.iter().zip(&other).all(|(a, b)| same(a.value, b.value)));
+    }
+}

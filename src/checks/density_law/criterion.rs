@@ -4,6 +4,7 @@
 use super::{
     adiabatic_lapse, buoyancy_error, density_maximum, density_span, dissipation_number, drift, hydrostatic_span,
 };
+use crate::case::model::Property;
 use crate::substances::{Medium, Properties};
 
 /// Points at which the properties are taken, both ends of the span among them: more than the ends, for a property may
@@ -110,7 +111,7 @@ pub fn evaluate_at(medium: &Medium<'_>, conditions: &Conditions) -> CriterionVal
     let at = conditions;
     let Some(own) = medium.properties(at.reference, at.pressure) else { return CriterionValues::UNKNOWN };
     let told = Properties { expansion: at.stated_expansion.unwrap_or(own.expansion), ..own };
-    let samples = sampled(medium, at);
+    let samples = sampled(medium, at, &own);
     let misstatement = buoyancy_error::misstatement(&samples, at.reference, &told);
     let over_span = |of: fn(&Properties) -> f64| drift::over_span(&samples, &own, of);
     CriterionValues {
@@ -147,13 +148,36 @@ pub fn of_constants(constants: &Properties, conditions: &Conditions) -> Criterio
 pub type Sample = (f64, Properties);
 
 /// The properties at evenly spaced temperatures of the span, where the medium has data.
-fn sampled(medium: &Medium<'_>, conditions: &Conditions) -> Vec<Sample> {
+fn sampled(medium: &Medium<'_>, conditions: &Conditions, own: &Properties) -> Vec<Sample> {
     let Conditions { lowest, highest, pressure, .. } = *conditions;
     (0..SAMPLES)
         .map(|index| lowest + (highest - lowest) * f64::from(index) / f64::from(SAMPLES - 1))
-        .filter_map(|temperature| Some((temperature, medium.properties(temperature, pressure)?)))
+        .filter_map(|temperature| {
+            let properties = medium.properties(temperature, pressure)?;
+            let density = match medium.substance.expansion {
+                // Such a substance may well give one density for all temperatures: α is what it says of the change.
+                Some(Property::Expression(_) | Property::Table(_)) => {
+                    own.density * contraction(medium, conditions.reference, temperature, pressure)
+                }
+                Some(Property::Code(_)) | None => properties.density,
+            };
+            Some((temperature, Properties { density, ..properties }))
+        })
         .filter(|(_, properties)| properties.density.is_finite())
         .collect()
+}
+
+/// ρ/ρ0 = exp(−∫ α dT) from `from` to `to`, by Simpson's rule.
+fn contraction(medium: &Medium<'_>, from: f64, to: f64, pressure: f64) -> f64 {
+    const PANELS: u32 = 8;
+    let step = (to - from) / f64::from(PANELS);
+    let integral: f64 = (0..=PANELS)
+        .map(|index| {
+            let weight = if index == 0 || index == PANELS { 1.0 } else { 2.0 + 2.0 * f64::from(index % 2) };
+            weight * medium.expansion(from + step * f64::from(index), pressure).unwrap_or(f64::NAN)
+        })
+        .sum();
+    (-integral * step / 3.0).exp()
 }
 
 fn covered(samples: &[Sample]) -> (f64, f64) {

@@ -4,6 +4,7 @@ use super::assess::{assessed, temperature, to_a_tenth, with_ends};
 use super::criterion::Sample;
 use super::remedy;
 use crate::case::model::DensityLaw;
+use crate::checks::look::{named, sentence};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::substances::Medium;
 use crate::syntax::{Finding, Level};
@@ -60,15 +61,15 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             let is_sure = region.band.iter().flatten().all(|corner| corner.densest_at.is_finite());
             let message = format!(
                 "{} is densest at {}, and {} spans {} to {}: fluid on either side of that is lighter, where the linear law has buoyancy change its sign at the reference alone{}",
-                region.fluid.name.text,
+                named(&region.fluid.name),
                 at,
-                region.region.name.text,
+                named(&region.region.name),
                 temperature(bracket.lowest.value),
                 temperature(bracket.highest.value),
                 if is_sure { "" } else { "; an end of the span is an estimate" },
             );
             let level = if is_sure { weighing.level } else { weighing.level.milder() };
-            let mut finding = Finding::new(CHECK.name, level, region.place(), message)
+            let mut finding = Finding::new(CHECK.name, level, region.place(), sentence(&message))
                 .remedy(remedy::join(&[
                     Some("`density-law variable`".to_string()),
                     Some(format!("temperatures all above or all below {at}")),

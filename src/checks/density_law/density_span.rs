@@ -1,7 +1,8 @@
 //! `density-span`: αΔT, the share by which density changes over the span.
 
-use super::assess::{Said, Weighed, temperature};
+use super::assess::{Said, Weighed, temperature, three_digits};
 use super::{criterion::CriterionValues, remedy};
+use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::display::{format_difference, format_number};
 use crate::syntax::{Finding, Level};
@@ -37,8 +38,8 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         Said {
             message: format!(
                 "αΔT is {} in {}, between {} ({}) and {} ({}), {} apart; the Boussinesq law is held to {}",
-                format_number(value),
-                region.region.name.text,
+                three_digits(value),
+                named(&region.region.name),
                 temperature(low.value),
                 low.set_by,
                 temperature(high.value),
@@ -68,7 +69,7 @@ mod tests {
 fluid content
     substance   air
     reference   25 degC at 0.79 bar
-    density-law boussinesq   #! density-span "αΔT is 0.1509"
+    density-law boussinesq   #! density-span "αΔT is 0.151"
 region tank
     box         0.5 m by 0.6 m by 1.1 m
     filled with content
@@ -226,7 +227,7 @@ boundary cool of tank
 "##;
         let found = crate::testing::findings(text);
         let advice = found.iter().find(|finding| finding.check == CHECK.name).map(|finding| finding.remedy.clone());
-        assert_eq!(advice.as_deref(), Some("`density-law ideal-gas`, or boundary warm below 54.8 degC."));
+        assert_eq!(advice.as_deref(), Some("`density-law ideal-gas`, or boundary warm below 54.8 degC"));
         // 29.8 K / 298.15 K is 0.09995, 29.9 K would be 0.1003.
         expect_of(CHECK.name, &text.replace("70 degC", "54.8 degC"));
     }

@@ -1,7 +1,8 @@
 //! `dissipation-number`: the heat of friction against the heat that is carried by convection.
 
-use super::assess::{Said, Weighed};
+use super::assess::{Said, Weighed, three_digits};
 use super::{criterion::CriterionValues, remedy};
+use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::display::format_number;
 use crate::syntax::{Finding, Level};
@@ -42,9 +43,9 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     NUMBER.findings(subject, weighing, |region, value, limit| Said {
         message: format!(
             "αgH/cp is {} over the {} m of {}: the heat of friction is no longer small; the Boussinesq energy equation leaves it out and is held to {}",
-            format_number(value),
+            three_digits(value),
             format_number(region.conditions.height),
-            region.region.name.text,
+            named(&region.region.name),
             format_number(limit),
         ),
         remedy: remedy::join(&[
@@ -68,7 +69,7 @@ mod tests {
 fluid content
     substance   air
     reference   10 degC
-    density-law boussinesq   #! dissipation-number "over the 4000 m"
+    density-law boussinesq   #! dissipation-number "4000 m of `tank`"
 region tank
     box         5 km by 5 km by 4 km
     filled with content

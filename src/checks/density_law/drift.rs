@@ -3,21 +3,19 @@
 use super::assess::{Assessed, Said, per_cent, temperature};
 use super::criterion::{CriterionValues, Sample};
 use super::remedy;
+use crate::checks::look::named;
 use crate::quantity::Dimension;
 use crate::quantity::display::format_si;
 use crate::substances::Properties;
 
-/// (greatest − least) / |value at T0|, the value at T0 counted among them: the solver holds the property at that value,
-/// so a reference outside the span adds to the change.
+/// (greatest − least) / |value at T0| over the samples.
 ///
 /// Source: Gray and Giorgini 1976, whose criteria for μ, k, cp and α these are.
 pub fn over_span(samples: &[Sample], reference: &Properties, of: fn(&Properties) -> f64) -> f64 {
-    let at_reference = of(reference);
-    let values = samples.iter().map(|(_, properties)| of(properties)).filter(|value| value.is_finite());
-    let (count, least, greatest) = values.fold((0, at_reference, at_reference), |(count, least, greatest), value| {
-        (count + 1, value.min(least), value.max(greatest))
-    });
-    if count == 0 || at_reference == 0.0 { f64::NAN } else { (greatest - least) / at_reference.abs() }
+    let values = || samples.iter().map(|(_, properties)| of(properties)).filter(|value| value.is_finite());
+    let change = values().fold(f64::NEG_INFINITY, f64::max) - values().fold(f64::INFINITY, f64::min);
+    let drift = change / of(reference).abs();
+    if drift.is_finite() { drift } else { f64::NAN }
 }
 
 /// A property that may drift: its words, and how to take it.
@@ -39,7 +37,7 @@ pub fn said(assessed: &Assessed<'_>, value: f64, limit: f64, of: &Drifting, by_f
     Said {
         message: format!(
             "the {name} of {} {}, by {} of its value at the reference, {}; held constant, it is taken to {}",
-            assessed.fluid.name.text,
+            named(&assessed.fluid.name),
             course(assessed, value, of),
             per_cent(value),
             temperature(assessed.conditions.reference),
@@ -58,7 +56,6 @@ pub fn said(assessed: &Assessed<'_>, value: f64, limit: f64, of: &Drifting, by_f
 fn course(assessed: &Assessed<'_>, value: f64, of: &Drifting) -> String {
     let reference = assessed.conditions.reference;
     let (lowest, highest) = assessed.values.covered;
-    let (lowest, highest) = (lowest.min(reference), highest.max(reference));
     let property_at = |temperature: f64| {
         let properties = assessed.medium?.properties(temperature, assessed.conditions.pressure)?;
         Some((of.property)(&properties)).filter(|property| property.is_finite())

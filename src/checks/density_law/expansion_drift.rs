@@ -54,7 +54,7 @@ mod tests {
 fluid content
     substance   water
     reference   25 degC
-    density-law boussinesq   #! expansion-drift "expansion of content rises from"
+    density-law boussinesq   #! expansion-drift "expansion of `content` rises from"
 region tank
     box         0.5 m by 0.6 m by 1.1 m
     filled with content

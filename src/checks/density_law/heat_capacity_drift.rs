@@ -50,7 +50,7 @@ mod tests {
 fluid content
     substance   engine_oil
     reference   80 degC
-    density-law boussinesq   #! heat-capacity-drift "heat capacity of content rises"
+    density-law boussinesq   #! heat-capacity-drift "heat capacity of `content` rises"
 region tank
     box         0.5 m by 0.6 m by 1.1 m
     filled with content

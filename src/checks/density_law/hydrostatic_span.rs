@@ -1,7 +1,8 @@
 //! `hydrostatic-span`: the change of density under the fluid's own weight.
 
-use super::assess::{Said, Weighed};
+use super::assess::{Said, Weighed, three_digits};
 use super::{criterion::CriterionValues, remedy};
+use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::display::format_number;
 use crate::syntax::{Finding, Level};
@@ -36,9 +37,9 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         message: format!(
             "over the {} m of {}, the weight of {} alone changes its density by {} of itself; the Boussinesq law is held to {}",
             format_number(region.conditions.height),
-            region.region.name.text,
-            region.fluid.name.text,
-            format_number(value),
+            named(&region.region.name),
+            named(&region.fluid.name),
+            three_digits(value),
             format_number(limit),
         ),
         remedy: remedy::join(&[
@@ -62,7 +63,7 @@ mod tests {
 fluid content
     substance   air
     reference   15 degC
-    density-law boussinesq   #! hydrostatic-span "over the 900 m of tank"
+    density-law boussinesq   #! hydrostatic-span "900 m of `tank`"
 region tank
     box         5 m by 5 m by 900 m
     filled with content

@@ -5,6 +5,7 @@ use super::criteria::NUMBERS;
 use super::criterion::Conditions;
 use super::remedy;
 use crate::case::model::DensityLaw;
+use crate::checks::look::{named, sentence};
 use crate::checks::{Basis, Check, Family, Subject, Weighing, weighing};
 use crate::syntax::{Finding, Fix, Level};
 
@@ -60,14 +61,14 @@ fn finding(subject: &Subject<'_>, region: &Assessed<'_>, level: Level) -> Option
     let law = region.fluid.density_law?;
     let message = format!(
         "the Boussinesq law would hold in {} with a wide margin: of all criteria {} comes nearest to its limit, {} of {}; density-law {} costs solver time and gains little",
-        region.region.name.text,
+        named(&region.region.name),
         tightest.0,
         two_digits(tightest.1),
         two_digits(tightest.2),
         remedy::law_word(law.value),
     );
-    let mut finding = Finding::new(CHECK.name, level, law.place, message)
-        .remedy(format!("`density-law boussinesq` with a reference of {}.", temperature(middle)))
+    let mut finding = Finding::new(CHECK.name, level, law.place, sentence(&message))
+        .remedy(format!("`density-law boussinesq` with a reference of {}", temperature(middle)))
         .about(&*region.region.name.text);
     let Fix { mut edits, title, sure } = remedy::change_law(law, DensityLaw::Boussinesq, false);
     let is_off = region.fluid.reference_temperature.as_ref().is_some_and(|stated| (stated.si - middle).abs() > 0.5);

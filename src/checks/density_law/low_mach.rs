@@ -1,8 +1,9 @@
 //! `low-mach`: velocities small against the speed of sound.
 
-use super::assess::{Assessed, Said, Weighed};
+use super::assess::{Assessed, Said, Weighed, three_digits};
 use super::criterion::CriterionValues;
 use super::remedy;
+use crate::checks::look::named;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::dimension_names::SPEED;
 use crate::quantity::display::{format_number, format_si};
@@ -47,10 +48,10 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         Said {
             message: format!(
                 "the fastest velocity in {}, {} ({}), is Mach {}; the Boussinesq law is held to {}",
-                region.region.name.text,
+                named(&region.region.name),
                 format_si(fastest, SPEED),
                 if is_buoyant { "√(g α ΔT H)" } else { "given" },
-                format_number(value),
+                three_digits(value),
                 format_number(limit),
             ),
             remedy: remedy::join(&[

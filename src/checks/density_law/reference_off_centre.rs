@@ -6,6 +6,7 @@ use super::criterion::{Conditions, CriterionValues};
 use super::reference::{Span, span_of};
 use super::remedy;
 use crate::case::model::DensityLaw;
+use crate::checks::look::{named, sentence};
 use crate::checks::{Basis, Check, Family, Subject, Weighing, weighing};
 use crate::syntax::{Finding, Level};
 
@@ -41,7 +42,7 @@ fn run(subject: &Subject<'_>, own: &Weighing) -> Vec<Finding> {
         }
         let message = format!(
             "the reference of {}, {}, lies off the middle of the span of {} to {}; at {} {}",
-            fluid.name.text,
+            named(&fluid.name),
             temperature(stated.si),
             temperature(lowest.value),
             temperature(highest.value),
@@ -50,8 +51,8 @@ fn run(subject: &Subject<'_>, own: &Weighing) -> Vec<Finding> {
         );
         let rests_on_estimate = lowest.estimate.is_some() || highest.estimate.is_some();
         let level = if rests_on_estimate { own.level.milder() } else { own.level };
-        let mut finding = Finding::new(CHECK.name, level, stated.origin.place, message)
-            .remedy(format!("A reference of {}.", temperature(middle)))
+        let mut finding = Finding::new(CHECK.name, level, stated.origin.place, sentence(&message))
+            .remedy(format!("a reference of {}", temperature(middle)))
             .about(&*fluid.name.text);
         finding.fixes.extend(remedy::move_reference(fluid, middle, false));
         Some(finding)

@@ -4,6 +4,7 @@ use super::assess::{assessed, temperature, with_ends};
 use super::reference::{Span, span_of};
 use super::{closed_gas_pressure, remedy};
 use crate::case::model::DensityLaw;
+use crate::checks::look::{named, sentence};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::display::format_difference;
 use crate::syntax::{Finding, Level};
@@ -43,7 +44,7 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             let middle = remedy::mid_span(lowest.value, highest.value, remedy::unit_of_reference(fluid))?;
             let message = format!(
                 "the reference of {}, {}, is {} {} the {} temperature that the fluid comes to, {} ({}{})",
-                fluid.name.text,
+                named(&fluid.name),
                 temperature(stated.si),
                 format_difference(beyond),
                 if is_above { "above" } else { "below" },
@@ -52,8 +53,8 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
                 end.set_by,
                 if end.estimate.is_some() { ", an estimate" } else { "" },
             );
-            let mut finding = Finding::new(CHECK.name, level, stated.origin.place, message)
-                .remedy(format!("A reference at mid-span, {}.", temperature(middle)))
+            let mut finding = Finding::new(CHECK.name, level, stated.origin.place, sentence(&message))
+                .remedy(format!("a reference at mid-span, {}", temperature(middle)))
                 .about(&*fluid.name.text);
             let rests_on_estimate = lowest.estimate.is_some() || highest.estimate.is_some();
             // A sealed gas may have its reference where it was sealed in.

@@ -8,8 +8,8 @@ use crate::quantity::display::{format_in, format_number};
 use crate::quantity::parse_unit;
 use crate::syntax::{Edit, Fix, Span};
 
-/// Halvings in the search for the widest span within a limit: to 1/65536 of the span.
-const HALVINGS: u32 = 16;
+/// Halvings in the search for the widest span within a limit: to 1/16384 of the span.
+const HALVINGS: u32 = 14;
 
 /// The density law that follows the true density.
 pub fn other_law(assessed: &Assessed<'_>) -> &'static str {
@@ -43,7 +43,7 @@ pub fn narrower(assessed: &Assessed<'_>, pick: fn(&CriterionValues) -> f64, limi
     if !(lowest <= highest && reference.is_finite()) {
         return None;
     }
-    let about = reference.clamp(lowest, highest);
+    let about = reference.max(lowest).min(highest);
     let value = |conditions: Conditions| pick(&assessed.under(&conditions));
     let hot_end = highest - about >= about - lowest;
     let one_end = most_within(limit, |share| {
@@ -92,19 +92,14 @@ fn cautious(kelvin: f64, is_highest: bool) -> f64 {
     273.15 + 0.1 * rounded
 }
 
-/// Advice joined: "A, B, or C."
+/// Advice joined: "A, B, or C".
 pub fn join(options: &[Option<String>]) -> String {
     let options: Vec<&str> = options.iter().flatten().map(String::as_str).collect();
     match options.split_last() {
         None => String::new(),
-        Some((last, [])) => sentence(last),
-        Some((last, rest)) => sentence(&format!("{}, or {last}", rest.join(", "))),
+        Some((last, [])) => (*last).to_string(),
+        Some((last, rest)) => format!("{}, or {last}", rest.join(", ")),
     }
-}
-
-fn sentence(text: &str) -> String {
-    let mut letters = text.chars();
-    letters.next().map_or_else(String::new, |first| format!("{}{}.", first.to_uppercase(), letters.as_str()))
 }
 
 /// The unit in which the reference is written.

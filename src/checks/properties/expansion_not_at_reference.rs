@@ -3,6 +3,7 @@
 use super::slip;
 use super::stated::{about, as_written, deviation, in_unit_of, is_gas, reference_pressure, reference_temperature};
 use crate::checks::density_law::assess::{per_cent, temperature, two_digits};
+use crate::checks::look::{named, sentence};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::substances::Medium;
 use crate::syntax::{Finding, Level, Margin};
@@ -50,12 +51,12 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
             let right = in_unit_of(ideal, stated);
             let message = format!(
                 "the expansion of {}, {}, is {far} off that of an ideal gas at the reference, 1/T0 = {right} at {}{belongs}",
-                fluid.name.text,
+                named(&fluid.name),
                 as_written(stated),
                 temperature(reference),
             );
-            let mut finding = Finding::new(CHECK.name, level, stated.origin.place, message)
-                .remedy(format!("{right}, or no statement: the substance then gives it."))
+            let mut finding = Finding::new(CHECK.name, level, stated.origin.place, sentence(&message))
+                .remedy(format!("{right}, or no statement: the substance then gives it"))
                 .about(&*fluid.name.text)
                 .weighing(Margin {
                     quantity: "α off by".to_string(),

@@ -1,6 +1,7 @@
 //! `likely-unit-slip`: the value fits the substance, or what is usual, in another unit.
 
 use super::slip::{replacement, slips};
+use crate::checks::look::sentence;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::syntax::{Finding, Level};
 
@@ -21,8 +22,8 @@ pub static CHECK: Check = Check {
 
 fn run(subject: &Subject<'_>, _: &Weighing) -> Vec<Finding> {
     let findings = slips(subject).into_iter().map(|slip| {
-        let mut finding = Finding::new(CHECK.name, slip.level, slip.place, slip.message)
-            .remedy(format!("{}.", slip.meant))
+        let mut finding = Finding::new(CHECK.name, slip.level, slip.place, sentence(&slip.message))
+            .remedy(slip.meant.clone())
             .about(slip.subject);
         if let Some(literal) = slip.literal {
             finding.fixes.push(replacement(format!("Write {}", slip.meant), literal, slip.meant, slip.sure));

@@ -4,6 +4,7 @@
 use super::slip;
 use super::stated::{PROPERTIES, as_written};
 use crate::case::model::{Case, Heat, Region, Shape, Value};
+use crate::checks::look::{named, sentence};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::syntax::{Finding, Level};
 
@@ -65,13 +66,13 @@ impl Must {
     fn remedy(self) -> &'static str {
         match self {
             Must::BeAbove0 => "",
-            Must::NotBeBelow0 => "A magnitude; which way it goes, the statement says.",
-            Must::BeAboveAbsoluteZero => "Perhaps another unit was meant.",
-            Must::BeAShare => "A share between 0 and 1, or a percentage with its sign: 85 %.",
-            Must::BeAtLeast1 => "The ratio of a cell to the one before it, nearer the wall: 1.15.",
-            Must::BeWhole => "A whole number.",
+            Must::NotBeBelow0 => "a magnitude; which way it goes, the statement says",
+            Must::BeAboveAbsoluteZero => "the unit that was meant",
+            Must::BeAShare => "a share between 0 and 1, or a percentage with its sign: 85 %",
+            Must::BeAtLeast1 => "the ratio of a cell to the one before it, nearer the wall: 1.15",
+            Must::BeWhole => "a whole number",
             Must::BeATilt => {
-                "The angle of the hot plate against the horizontal: 0 deg is heated from below, 90 deg from the side."
+                "the angle of the hot plate against the horizontal: 0 deg is heated from below, 90 deg from the side"
             }
         }
     }
@@ -92,8 +93,8 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         .filter(|held| !held.must.holds(held.value.si) && !slip::is_slip(&slips, held.value))
         .map(|held| {
             let message =
-                format!("the {} of {}, {}, {}", held.name, held.of, as_written(held.value), held.must.words());
-            let finding = Finding::new(CHECK.name, weighing.level, held.value.origin.place, message);
+                format!("the {} of `{}`, {}, {}", held.name, held.of, as_written(held.value), held.must.words());
+            let finding = Finding::new(CHECK.name, weighing.level, held.value.origin.place, sentence(&message));
             finding.remedy(held.must.remedy()).about(held.of)
         })
         .collect();
@@ -109,12 +110,12 @@ fn turned_annulus(region: &Region, level: Level) -> Option<Finding> {
     }
     let message = format!(
         "the inner diameter of {}, {}, is not below the outer one, {}",
-        region.name.text,
+        named(&region.name),
         as_written(inner),
         as_written(outer)
     );
-    let finding = Finding::new(CHECK.name, level, inner.origin.place, message);
-    Some(finding.remedy("The inner diameter first, then the outer one.").about(&*region.name.text))
+    let finding = Finding::new(CHECK.name, level, inner.origin.place, sentence(&message));
+    Some(finding.remedy("the inner diameter first, then the outer one").about(&*region.name.text))
 }
 
 fn held(case: &Case) -> Vec<Held<'_>> {
@@ -241,7 +242,7 @@ fluid custom
 solid steel
     emissivity   -0.2        #! not-physical "between 0 and 1"
 region room
-    box          1 m by 0 m by 3 m   #! not-physical "size of room"
+    box          1 m by 0 m by 3 m   #! not-physical "size of `room`"
     tilt         200 deg     #! not-physical
 region ring
     annulus      0.2 m by 0.1 m   #! not-physical "inner diameter"
@@ -254,7 +255,7 @@ boundary e of room
     wall
     held at      -280 degC   #! not-physical
 mesh of room
-    cells        10.5 by 10 by 0   #! not-physical "number of cells of room, 10.5", not-physical "number of cells of room, 0"
+    cells        10.5 by 10 by 0   #! not-physical "number of cells of `room`, 10.5", not-physical "number of cells of `room`, 0"
     growth       0.8         #! not-physical "1 or more"
 run
     transient for 0 s step -1 s   #! not-physical "duration", not-physical "step"

@@ -6,6 +6,7 @@ use super::slip;
 use super::stated::reference_pressure;
 use crate::case::model::Value;
 use crate::checks::density_law::assess::temperature;
+use crate::checks::look::{named, sentence};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::physics::model::Bound;
 use crate::quantity::display::format_number;
@@ -59,8 +60,8 @@ fn beyond(bound: &Bound, medium: &Medium<'_>, level: Level, region: crate::synta
         medium.substance.name.text,
         range_of(medium),
     );
-    Finding::new(CHECK.name, level, bound.place.unwrap_or(region), message)
-        .remedy("A substance whose data cover it, or temperatures within them.")
+    Finding::new(CHECK.name, level, bound.place.unwrap_or(region), sentence(&message))
+        .remedy("a substance whose data cover it, or temperatures within them")
         .about(name)
 }
 
@@ -79,13 +80,13 @@ fn at_reference(subject: &Subject<'_>, slips: &[slip::Slip]) -> Vec<Finding> {
         {
             let message = format!(
                 "the reference of {}, {}, lies outside the data of {substance}, which hold {}",
-                fluid.name.text,
+                named(&fluid.name),
                 temperature(value.si),
                 range_of(&medium),
             );
             findings.push(
-                Finding::new(CHECK.name, Level::Error, value.origin.place, message)
-                    .remedy("A reference within the data, or a substance whose data cover it.")
+                Finding::new(CHECK.name, Level::Error, value.origin.place, sentence(&message))
+                    .remedy("a reference within the data, or a substance whose data cover it")
                     .about(&*fluid.name.text),
             );
         }
@@ -97,14 +98,14 @@ fn at_reference(subject: &Subject<'_>, slips: &[slip::Slip]) -> Vec<Finding> {
             let per_cent = |share: f64| format!("{} %", format_number(100.0 * share));
             let message = format!(
                 "the fraction of {}, {}, lies outside the data of {substance}, which hold from {} to {}",
-                fluid.name.text,
+                named(&fluid.name),
                 per_cent(value.si),
                 per_cent(least),
                 per_cent(most),
             );
             findings.push(
-                Finding::new(CHECK.name, Level::Error, value.origin.place, message)
-                    .remedy("A fraction within the data, or a substance whose data cover it.")
+                Finding::new(CHECK.name, Level::Error, value.origin.place, sentence(&message))
+                    .remedy("a fraction within the data, or a substance whose data cover it")
                     .about(&*fluid.name.text),
             );
         }

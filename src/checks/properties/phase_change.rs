@@ -3,6 +3,7 @@
 use super::slip;
 use super::stated::reference_pressure;
 use crate::checks::density_law::assess::{temperature, to_a_tenth};
+use crate::checks::look::{named, sentence};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::physics::model::{Bound, FluidState, Geometry};
 use crate::quantity::dimension_names::PRESSURE;
@@ -65,13 +66,13 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         if let Some(phase) = phase_at(&medium, value.si, pressure).filter(|_| !is_slip) {
             let message = format!(
                 "at the reference of {}, {} and {}, {}",
-                fluid.name.text,
+                named(&fluid.name),
                 temperature(value.si),
                 format_si(pressure, PRESSURE),
-                sentence(&medium, phase)
+                what_it_does(&medium, phase)
             );
             findings.push(
-                Finding::new(CHECK.name, weighing.level, value.origin.place, message)
+                Finding::new(CHECK.name, weighing.level, value.origin.place, sentence(&message))
                     .remedy(remedy(phase))
                     .about(&*fluid.name.text),
             );
@@ -136,20 +137,20 @@ fn of_bound(
         if phase.verb == "boils" { "reaches" } else { "goes down to" },
         temperature(bound.value),
         if bound.estimate.is_some() { " (an estimate)" } else { "" },
-        sentence(medium, phase),
+        what_it_does(medium, phase),
         format_si(state.pressure, PRESSURE),
     );
-    Finding::new(CHECK.name, level, bound.place.unwrap_or(place), message).remedy(remedy(phase)).about(name)
+    Finding::new(CHECK.name, level, bound.place.unwrap_or(place), sentence(&message)).remedy(remedy(phase)).about(name)
 }
 
-fn sentence(medium: &Medium<'_>, phase: Phase) -> String {
+fn what_it_does(medium: &Medium<'_>, phase: Phase) -> String {
     format!("{} {} at {}", medium.substance.name.text, phase.verb, to_a_tenth(phase.at))
 }
 
 fn remedy(phase: Phase) -> String {
     match phase.verb {
-        "boils" => format!("Temperatures below {}, or a higher pressure.", to_a_tenth(phase.at)),
-        verb => format!("Temperatures above {}, where it no longer {verb}.", to_a_tenth(phase.at)),
+        "boils" => format!("temperatures below {}, or a higher pressure", to_a_tenth(phase.at)),
+        verb => format!("temperatures above {}, where it no longer {verb}", to_a_tenth(phase.at)),
     }
 }
 

@@ -4,6 +4,7 @@ use super::slip;
 use super::stated::{PROPERTIES, PropertyRow, as_written, at_reference, deviation};
 use crate::case::model::{DensityLaw, Fluid, Value};
 use crate::checks::density_law::assess::{per_cent, temperature, two_digits};
+use crate::checks::look::{named, sentence};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::dimension_names::PRESSURE;
 use crate::quantity::display::{format_number, format_si};
@@ -81,15 +82,15 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         let (level, limit) = weighing.over(deviation(density.si, fluid.own.density)).filter(|_| is_ideal)?;
         let message = format!(
             "the density of {}, {}, is not that of an ideal gas at the reference, {} and {}: {} {} there; with density-law ideal-gas a solver takes that one",
-            fluid.fluid.name.text,
+            named(&fluid.fluid.name),
             as_written(density),
             temperature(fluid.temperature),
             format_si(fluid.pressure, PRESSURE),
             fluid.medium.substance.name.text,
             super::stated::in_unit_of(fluid.own.density, density),
         );
-        let finding = Finding::new(CHECK.name, level, density.origin.place, message)
-            .remedy("No density statement: the law and the reference give it.")
+        let finding = Finding::new(CHECK.name, level, density.origin.place, sentence(&message))
+            .remedy("no density statement: the law and the reference give it")
             .about(&*fluid.fluid.name.text);
         Some(finding.weighing(Margin {
             quantity: "ρ off by".to_string(),
@@ -122,14 +123,14 @@ fn disagreement(
     let message = format!(
         "the {} of {} is stated as {}, but {}/{below} of what is stated beside it is {}: {far} apart{}",
         left_row.name,
-        fluid.name.text,
+        named(&fluid.name),
         as_written(left),
         identity.above.join(" "),
         if left.dimension.is_none() { format_number(right) } else { super::stated::in_unit_of(right, left) },
         blamed(subject, fluid, values),
     );
-    let mut finding = Finding::new(CHECK.name, level, left.origin.place, message)
-        .remedy(format!("State only independent ones: without {}, it follows from the others.", left_row.name))
+    let mut finding = Finding::new(CHECK.name, level, left.origin.place, sentence(&message))
+        .remedy(format!("state only independent ones: without {}, it follows from the others", left_row.name))
         .about(&*fluid.name.text)
         .weighing(Margin {
             quantity: format!("{} off by", identity.left),

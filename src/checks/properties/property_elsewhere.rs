@@ -3,6 +3,7 @@
 use super::judge::{Judged, Verdict, judged};
 use super::property_off_library::{compared, with_own_value};
 use super::stated::{AtReference, about, deviation};
+use crate::checks::look::sentence;
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::syntax::{Finding, Level};
 
@@ -53,7 +54,7 @@ fn finding(
         fluid.medium.substance.name.text,
         about(at)
     );
-    let finding = Finding::new(CHECK.name, level, judged.value.origin.place, message);
+    let finding = Finding::new(CHECK.name, level, judged.value.origin.place, sentence(&message));
     Some(with_own_value(finding, fluid, judged, limit))
 }
 

@@ -3,6 +3,7 @@
 use super::judge::{Judged, Verdict, judged};
 use super::stated::{AtReference, as_written, in_unit_of};
 use crate::checks::density_law::assess::{per_cent, temperature, two_digits};
+use crate::checks::look::{named, sentence};
 use crate::checks::{Basis, Check, Family, Subject, Weighing};
 use crate::quantity::dimension_names::PRESSURE;
 use crate::quantity::display::format_si;
@@ -39,7 +40,8 @@ fn finding(fluid: &AtReference<'_>, judged: &Judged<'_>, weighing: &Weighing) ->
     } else {
         String::new()
     };
-    let finding = Finding::new(CHECK.name, level, judged.value.origin.place, compared(fluid, judged) + &elsewhere);
+    let finding =
+        Finding::new(CHECK.name, level, judged.value.origin.place, sentence(&(compared(fluid, judged) + &elsewhere)));
     Some(with_own_value(finding, fluid, judged, limit))
 }
 
@@ -57,7 +59,7 @@ pub fn compared(fluid: &AtReference<'_>, judged: &Judged<'_>) -> String {
     format!(
         "the {} of {}, {}, is {by} that of {} at the reference, {} and {}: {}",
         judged.property.name,
-        fluid.fluid.name.text,
+        named(&fluid.fluid.name),
         as_written(judged.value),
         fluid.medium.substance.name.text,
         temperature(fluid.temperature),
@@ -77,7 +79,7 @@ pub fn with_own_value(finding: Finding, fluid: &AtReference<'_>, judged: &Judged
         unit: String::new(),
     };
     let mut finding = finding
-        .remedy(format!("{own}, or no statement: the substance then gives it."))
+        .remedy(format!("{own}, or no statement: the substance then gives it"))
         .about(&*fluid.fluid.name.text)
         .weighing(margin);
     if let Some(literal) = judged.value.origin.literal {

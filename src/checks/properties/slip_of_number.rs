@@ -44,7 +44,7 @@ fn per_cent(value: &Value, name: &str, owner: &str) -> Option<Slip> {
         return None;
     }
     let meant = format!("{} %", rewritten(value.si));
-    let message = format!("the {name} of {owner}, {}, is over 1; {meant} was probably meant", as_written(value));
+    let message = format!("the {name} of `{owner}`, {}, is over 1; {meant} was probably meant", as_written(value));
     Some(Slip::of(value, owner, Level::Error, meant, true, message))
 }
 
@@ -55,7 +55,7 @@ fn degrees(value: &Value, owner: &str) -> Option<Slip> {
     }
     let meant = format!("{} deg", rewritten(value.si));
     let message = format!(
-        "the tilt of {owner}, {}, is in radians as it stands, and over π; {meant} was probably meant",
+        "the tilt of `{owner}`, {}, is in radians as it stands, and over π; {meant} was probably meant",
         as_written(value)
     );
     Some(Slip::of(value, owner, Level::Error, meant, true, message))
@@ -68,7 +68,7 @@ fn growth(value: &Value, owner: &str) -> Option<Slip> {
     }
     let meant = rewritten(1.0 + value.si);
     let message = format!(
-        "the growth of {owner}, {0}, makes each cell a fraction of the one before; {meant} makes it {0} greater",
+        "the growth of `{owner}`, {0}, makes each cell a fraction of the one before; {meant} makes it {0} greater",
         as_written(value)
     );
     Some(Slip::of(value, owner, Level::Error, meant, false, message))

@@ -8,6 +8,7 @@ use super::stated::{
 use crate::case::model::Value;
 use crate::checks::Subject;
 use crate::checks::density_law::assess::temperature;
+use crate::checks::look::named;
 use crate::quantity::parse_unit;
 use crate::syntax::Level;
 
@@ -52,7 +53,7 @@ fn in_other_unit(fluid: &AtReference<'_>, property: &PropertyRow, value: &Value,
     let message = format!(
         "the {} of {}, {}, is a unit away from that of {}, {} at {}: {meant} fits",
         property.name,
-        fluid.fluid.name.text,
+        named(&fluid.fluid.name),
         as_written(value),
         fluid.medium.substance.name.text,
         in_unit_of(own, value),
@@ -89,7 +90,7 @@ fn other_viscosity(fluid: &AtReference<'_>, property: &PropertyRow, value: &Valu
     let message = format!(
         "the {} of {}, {}, is the number of the {other_name} of {} at {}; the {} is {meant}",
         property.name,
-        fluid.fluid.name.text,
+        named(&fluid.fluid.name),
         as_written(value),
         fluid.medium.substance.name.text,
         temperature(fluid.temperature),

@@ -47,13 +47,13 @@ fn of_region(region: &Region, rayleigh: f64) -> Vec<Slip> {
         && spacing.si >= 3.0 * height.si
         && 1e-3 * spacing.si < height.si
     {
-        let why = format!("{name} is {} wide and only {} high", as_written(spacing), as_written(height));
+        let why = format!("`{name}` is {} wide and only {} high", as_written(spacing), as_written(height));
         return rescaled(spacing, "m", "mm", name, &why).into_iter().collect();
     }
     let lengths = lengths(shape);
     let each = |from: &str, to: &str, why: &str| {
         let slips = lengths.iter().filter_map(|length| {
-            rescaled(length, from, to, name, &format!("{name} has a length of {}, and {why}", as_written(length)))
+            rescaled(length, from, to, name, &format!("`{name}` has a length of {}, and {why}", as_written(length)))
         });
         slips.collect()
     };
@@ -78,7 +78,7 @@ fn of_first_cell(case: &Case, mesh: &Mesh) -> Option<Slip> {
     }
     let name = &region.name.text;
     let why =
-        format!("a first cell of {} hardly fits into {name}, which is {} wide", as_written(first), as_written(least));
+        format!("a first cell of {} hardly fits into `{name}`, which is {} wide", as_written(first), as_written(least));
     rescaled(first, "m", "mm", name, &why)
 }
 

@@ -122,7 +122,7 @@ fn of_temperature(stated: &Stated<'_>, middles: &Middles) -> Option<Slip> {
         .filter(|_| !holds(si))
         .map_or(String::new(), |medium| format!("; {} has no data there", medium.substance.name.text));
     let message = format!(
-        "{} of {} is {}{substance}{beside}; {meant}{} was probably meant",
+        "{} of `{}` is {}{substance}{beside}; {meant}{} was probably meant",
         as_written(stated.value),
         stated.owner,
         temperature(si),

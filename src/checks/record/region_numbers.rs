@@ -1,7 +1,8 @@
 //! The numbers of a region that a requirement may name, with the bands of the estimates behind them.
 
 use crate::checks::check::Subject;
-use crate::checks::look::{Weighed, regions, relative_band};
+use crate::checks::look::{Weighed, regions};
+use crate::physics;
 use crate::physics::model::{Bound, RegionPhysics};
 
 /// Which value of an estimate is taken.
@@ -35,31 +36,18 @@ fn at_end(weighed: &Weighed, end: End) -> f64 {
 }
 
 fn of_physics(physics: &RegionPhysics, number: &str) -> Weighed {
-    let numbers = &physics.numbers;
-    let bracket = physics.bracket.as_ref();
-    let temperature = |bound: Option<&Bound>| match bound {
-        Some(bound) => Weighed { value: bound.value, band: bound.band },
-        None => Weighed::given(f64::NAN),
-    };
+    let value = physics::region_number(physics, number);
+    let (numbers, bracket) = (&physics.numbers, physics.bracket.as_ref());
+    let at = |bound: Option<&Bound>| Weighed { value, band: bound.map_or((value, value), |bound| bound.band) };
     match number {
-        "Ra" => Weighed::proportional(numbers.rayleigh, bracket),
-        "Gr" => Weighed::proportional(numbers.grashof, bracket),
-        "Pr" => Weighed::given(numbers.prandtl),
-        "Re" => Weighed::given(numbers.reynolds),
-        "Ri" => Weighed::proportional(numbers.richardson, bracket),
-        "Nu" => Weighed { value: numbers.nusselt, band: numbers.nusselt_band },
+        "Ra" | "Gr" | "Ri" | "alpha_dT" | "temperature_span" => Weighed::proportional(value, bracket),
+        "Nu" => Weighed { value, band: numbers.nusselt_band },
         // The buoyant velocity goes with the root of the difference; a given velocity does not change.
-        "Ma" if numbers.given_velocity >= numbers.buoyant_velocity => Weighed::given(numbers.mach),
-        "Ma" => Weighed::power(numbers.mach, 0.5, bracket),
-        "alpha_dT" => Weighed::proportional(numbers.expansion_span, bracket),
-        "peak_temperature" => temperature(bracket.map(|bracket| &bracket.highest)),
-        "lowest_temperature" => temperature(bracket.map(|bracket| &bracket.lowest)),
-        "temperature_span" => {
-            let span = bracket.map_or(f64::NAN, |bracket| bracket.span());
-            let (least, most) = relative_band(bracket);
-            Weighed { value: span, band: (span * least, span * most) }
-        }
-        _ => Weighed::given(f64::NAN),
+        "Ma" if numbers.given_velocity >= numbers.buoyant_velocity => Weighed::given(value),
+        "Ma" => Weighed::power(value, 0.5, bracket),
+        "peak_temperature" => at(bracket.map(|bracket| &bracket.highest)),
+        "lowest_temperature" => at(bracket.map(|bracket| &bracket.lowest)),
+        _ => Weighed::given(value),
     }
 }
 

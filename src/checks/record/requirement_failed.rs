@@ -126,3 +126,74 @@ fn in_words(requirement: &Requirement, si: f64) -> String {
         format_si(si, requirement.dimension)
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn given_temperatures() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+require
+    peak_temperature(c) < 29 degC  #! requirement-failed "does not hold: the left side is 30 degC, the right side 29 degC"
+    peak_temperature(c) <= 30 degC
+    temperature_span(c) > 20 K  #! requirement-failed "the left side is 20 K"
+    temperature_span(c) >= 20 K
+    Ra(c) within 1e3 .. 1e6  #! requirement-failed "the range 1000 to 1e6"
+    Ra(c) within 1e3 .. 1e9
+"##,
+        );
+    }
+
+    #[test]
+    fn with_names_of_the_deck() {
+        expect_of(
+            CHECK.name,
+            r##"
+given
+    limit = 25 degC
+    margin = 2 K
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+require
+    peak_temperature(c) + margin < limit  #! requirement-failed "the left side is 32 degC, the right side 25 degC"
+    limit < peak_temperature(c)
+"##,
+        );
+    }
+}

@@ -47,3 +47,38 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn what_nothing_settles() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+require
+    Re(c) < 2000  #! requirement-unknown "`Re(c)` is not known"
+    Ra(c) < 1e9
+"##,
+        );
+    }
+}

@@ -12,8 +12,7 @@ pub const CHECK: Check = Check {
     limits: &[],
     level: Level::Hint,
     basis: Basis {
-        compares: "Says which ends of the temperatures of a region are estimated, by what, and with which band. Outside the published range \
-                   of the correlation it is an information.",
+        compares: "Says which ends of the temperatures of a region are estimated, by what, and with which band.",
         formula: "",
         source: "the correlation or balance that the finding names",
         remedy: "Hold the estimate against a measurement or a finer method where a verdict depends on it.",
@@ -32,14 +31,10 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         }
         let numbers = &physics.numbers;
         let is_outside = numbers.nusselt.is_finite() && !numbers.nusselt_inside_range;
-        let (level, note) = if is_outside {
-            (Level::Information.max(weighing.level), " The correlation is used outside its published range.")
-        } else {
-            (weighing.level, "")
-        };
-        let message = format!("In `{}` {}.{note}", region.name.text, parts.join(", and "));
+        let note = if is_outside { " The correlation of the region is used outside its published range." } else { "" };
+        let message = format!("In `{}` {}.{note}", region.name.text, parts.join("; "));
         findings.push(
-            finding_of(CHECK.name, level, &region.name, message)
+            finding_of(CHECK.name, weighing.level, &region.name, message)
                 .remedy("hold it against a measurement or a finer method where a verdict depends on it"),
         );
     }
@@ -53,10 +48,68 @@ fn in_words(which: &str, bound: &Bound) -> Option<String> {
         return None;
     }
     Some(format!(
-        "the {which} temperature is estimated: {} ({} to {}), {}, by {by}",
+        "the {which} temperature is an estimate, {} ({} to {}): {}; {by}",
         celsius(bound.value),
         celsius(low),
         celsius(high),
         bound.set_by
     ))
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn a_flux() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c  #! rests-on-estimate "the highest temperature is an estimate"
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    heated by 20 W/m^2
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn given_ends() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
 }

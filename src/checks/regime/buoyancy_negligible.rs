@@ -51,3 +51,95 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn on_either_side_of_the_limit() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary vent of c
+    side bottom
+    inlet
+    enters at 2.4 m/s
+    carries 20 degC
+boundary grille of c
+    side top
+    outlet
+    backflow 20 degC
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c  #! buoyancy-negligible
+    box          1 m by 1 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary vent of c
+    side bottom
+    inlet
+    enters at 2.8 m/s
+    carries 20 degC
+boundary grille of c
+    side top
+    outlet
+    backflow 20 degC
+"##,
+        );
+    }
+
+    #[test]
+    fn nothing_drives_it() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+}

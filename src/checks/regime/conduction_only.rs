@@ -43,3 +43,133 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn on_either_side_of_the_onset() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c  #! conduction-only "both faces rigid"
+    box          1 m by 9.2 mm
+    filled with  a
+    flow         laminar
+boundary floor of c
+    side bottom
+    held at 30 degC
+boundary lid of c
+    side top
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 9.6 mm
+    filled with  a
+    flow         laminar
+boundary floor of c
+    side bottom
+    held at 30 degC
+boundary lid of c
+    side top
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn a_lid_that_slips() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c  #! conduction-only "one face rigid, one free"
+    box          1 m by 8 mm
+    filled with  a
+    flow         laminar
+boundary floor of c
+    side bottom
+    held at 30 degC
+boundary lid of c
+    side top
+    wall slip
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 8.3 mm
+    filled with  a
+    flow         laminar
+boundary floor of c
+    side bottom
+    held at 30 degC
+boundary lid of c
+    side top
+    wall slip
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn water_over_its_density_maximum() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    water
+    reference    20 degC at 1 atm
+    density-law  variable
+region c
+    box          1 m by 9.9 mm
+    filled with  a
+    flow         laminar
+boundary floor of c
+    side bottom
+    held at 8 degC
+boundary lid of c
+    side top
+    held at 0.1 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+}

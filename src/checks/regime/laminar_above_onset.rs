@@ -11,14 +11,14 @@ use crate::syntax::{Finding, Level};
 pub const CHECK: Check = Check {
     name: "laminar-above-onset",
     family: Family::Regime,
-    limits: &[(Level::Information, 1.0), (Level::Warning, 3.0)],
+    limits: &[(Level::Information, 1.0), (Level::Warning, 5.0)],
     level: Level::Warning,
     basis: Basis {
         compares: "Holds the Rayleigh number of a region whose flow is said to be laminar against the one at which its arrangement turns \
                    turbulent. The transition is gradual, so it speaks in two steps.",
         formula: "Ra / Ra_onset, both on the onset's own length",
-        source: "vertical plates, and cavities up to ten times as high as wide: 1e9 on the height (common practice; Bejan and Lage, J. Heat \
-                 Transfer 112 (1990) 787, recalled). Taller cavities: 1e6 on the spacing (MacGregor and Emery, J. Heat Transfer 91 (1969) 391). \
+        source: "upright plates, and cavities up to ten times as high as wide: Ra 1e9 on the height in gases (common practice), Gr 1e9 in \
+                 other fluids (Bejan and Lage, J. Heat Transfer 112 (1990) 787, recalled). Taller cavities: 1e6 on the spacing (MacGregor and Emery, J. Heat Transfer 91 (1969) 391). \
                  Layers heated from below: 3e5 (common practice). Horizontal plates facing up: 8e6 on area over perimeter (Lloyd and Moran, J. \
                  Heat Transfer 96 (1974) 443, recalled). Horizontal cylinders: 1e9 (Churchill and Chu, Int. J. Heat Mass Transfer 18 (1975) 1049)",
         remedy: "A turbulence model, or direct simulation on a mesh that resolves every scale.",
@@ -51,4 +51,153 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         );
     }
     findings
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn on_either_side_of_the_onset() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.77 m by 0.77 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.8 m by 0.8 m
+    filled with  a
+    flow         laminar  #! laminar-above-onset "sets in near 1e9"
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn a_model_or_none_named() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          2 m by 2 m
+    filled with  a
+    flow         turbulent by k-omega
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          2 m by 2 m
+    filled with  a
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn a_tall_gap_is_judged_by_its_spacing() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          16 mm by 3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          100 mm by 3 m
+    filled with  a
+    flow         laminar  #! laminar-above-onset "on the distance of the walls"
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
 }

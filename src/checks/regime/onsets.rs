@@ -3,7 +3,7 @@
 
 use crate::case::model::{BoundaryKind, Case, Region, Side};
 use crate::checks::closure::sides::names;
-use crate::checks::look::Weighed;
+use crate::checks::look::{Weighed, has_density_maximum};
 use crate::physics::correlations::onset::{self, Onset};
 use crate::physics::model::{ArrangementKind, RegionPhysics};
 
@@ -20,12 +20,22 @@ const TALL_CAVITY_TURBULENT: Onset = Onset {
     source: "MacGregor and Emery, J. Heat Transfer 91 (1969) 391-403: their turbulent form holds from there",
 };
 
-/// Turbulence in a cavity whose walls are apart: each is a plate.
-const CAVITY_TURBULENT: Onset = Onset {
-    name: "turbulence in a side-heated cavity",
-    length: "height of the cavity",
-    ..onset::VERTICAL_PLATE_TURBULENT
-};
+/// Grashof number at which the layer on an upright wall turns turbulent, whatever the Prandtl number (Bejan and Lage 1990).
+const UPRIGHT_WALL_GRASHOF: f64 = 1e9;
+
+/// Turbulence on an upright wall: a plate, or a wall of a cavity in which both are apart.
+/// In gases practice takes a Rayleigh number of 1e9 for it, which differs by less than the onset is sharp.
+fn upright_wall(name: &'static str, prandtl: f64) -> Onset {
+    let is_gas_like = (0.5..=1.0).contains(&prandtl);
+    let by_practice = onset::VERTICAL_PLATE_TURBULENT.rayleigh;
+    Onset {
+        name,
+        rayleigh: if is_gas_like { by_practice } else { UPRIGHT_WALL_GRASHOF * prandtl },
+        length: "height",
+        width: onset::VERTICAL_PLATE_TURBULENT.width,
+        source: "Bejan and Lage, J. Heat Transfer 112 (1990) 787-790 (recalled)",
+    }
+}
 
 /// An onset, and the region's Rayleigh number on the onset's own length.
 #[derive(Clone, Copy, Debug)]
@@ -62,15 +72,18 @@ fn scaled(weighed: Weighed, factor: f64) -> Weighed {
 /// The onset of turbulence; `None` for an arrangement of which none is published, or of no known Rayleigh number.
 pub fn turbulence(physics: &RegionPhysics) -> Option<Held> {
     let geometry = &physics.geometry;
+    let prandtl = physics.numbers.prandtl;
     let (onset, length) = match physics.arrangement.kind {
-        ArrangementKind::VerticalPlate => (onset::VERTICAL_PLATE_TURBULENT, geometry.height),
+        ArrangementKind::VerticalPlate => (upright_wall("turbulence on an upright plate", prandtl), geometry.height),
         ArrangementKind::PlateFacingUp => (onset::HORIZONTAL_PLATE_TURBULENT, geometry.length),
         ArrangementKind::HorizontalCylinder => (onset::HORIZONTAL_CYLINDER_TURBULENT, geometry.length),
         ArrangementKind::LayerHeatedFromBelow => (onset::LAYER_TURBULENT, geometry.height),
         ArrangementKind::SideHeatedCavity if geometry.height > TALL * geometry.spacing => {
             (TALL_CAVITY_TURBULENT, geometry.spacing)
         }
-        ArrangementKind::SideHeatedCavity => (CAVITY_TURBULENT, geometry.height),
+        ArrangementKind::SideHeatedCavity => {
+            (upright_wall("turbulence on the walls of a cavity", prandtl), geometry.height)
+        }
         _ => return None,
     };
     held(physics, onset, length)
@@ -92,7 +105,8 @@ pub fn unsteadiness(physics: &RegionPhysics) -> Option<Held> {
 
 /// The onset of motion in a layer heated from below, by whether its faces let the fluid slip.
 pub fn motion(case: &Case, region: &Region, physics: &RegionPhysics) -> Option<Held> {
-    if physics.arrangement.kind != ArrangementKind::LayerHeatedFromBelow {
+    let is_layer = physics.arrangement.kind == ArrangementKind::LayerHeatedFromBelow;
+    if !is_layer || has_density_maximum(case, region, physics) {
         return None;
     }
     let slips = |side: Side| {
@@ -149,6 +163,14 @@ mod tests {
         // A cavity twice as high as wide whose Ra is on the spacing.
         let held = turbulence(&cavity(2.0, 1.0, 1.0, 1e8)).unwrap();
         assert!((held.rayleigh.value - 8e8).abs() < 1.0);
+    }
+
+    #[test]
+    fn water_turns_turbulent_at_a_higher_rayleigh_number() {
+        // Lankford and Bejan, J. Heat Transfer 108 (1986) 755: laminar layers in water at Ra 2.5e9 on the height, Pr 5.
+        let mut physics = cavity(0.5, 0.15, 0.5, 2.5e9);
+        physics.numbers.prandtl = 5.0;
+        assert!(turbulence(&physics).unwrap().over_onset().value < 1.0);
     }
 
     #[test]

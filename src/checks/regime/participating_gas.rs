@@ -97,7 +97,108 @@ fn beam_length(geometry: &Geometry) -> f64 {
 
 #[cfg(test)]
 mod tests {
-    use super::absorption;
+    use super::{CHECK, absorption};
+    use crate::testing::expect_of;
+
+    #[test]
+    fn gases_that_absorb() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    carbon_dioxide
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+    radiation surface-to-surface  #! participating-gas
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    carbon_dioxide
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 mm by 10 mm
+    filled with  a
+    flow         laminar
+    radiation surface-to-surface
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+    radiation surface-to-surface
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn liquids() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    water
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+    radiation surface-to-surface  #! participating-gas "is a liquid"
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
 
     #[test]
     fn planck_means() {

@@ -4,12 +4,11 @@ use crate::case::model::{Boundary, BoundaryKind, Case, Heat, Radiation, Region};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
 use crate::checks::closure::parts::{Role, role};
 use crate::checks::look::{Weighed, estimate_note, regions};
+use crate::physics::conditions::STEFAN_BOLTZMANN;
 use crate::quantity::display::format_number;
 use crate::substances::Medium;
 use crate::syntax::{Finding, Level};
 
-/// Stefan-Boltzmann constant, W/(m² K⁴): 5.670374419e-8 (exact since 2019; CODATA 2018).
-const STEFAN_BOLTZMANN: f64 = 5.670_374_419e-8;
 /// Emissivity of a surface that states none: paint, paper, plastics, stone, glass and oxides lie at 0.85 to 0.95 (common practice).
 const USUAL_EMISSIVITY: f64 = 0.9;
 
@@ -121,4 +120,145 @@ fn emissivity_of(case: &Case, boundary: &Boundary) -> Option<f64> {
     };
     let value = boundary.emissivity.as_ref().or_else(behind)?.si;
     (value > 0.0 && value <= 1.0).then_some(value)
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn bright_and_dark_faces() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c  #! radiation-neglected
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+    emissivity 0.9
+boundary cold of c
+    side east
+    held at 10 degC
+    emissivity 0.9
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+    emissivity 0.03
+boundary cold of c
+    side east
+    held at 10 degC
+    emissivity 0.03
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn computed() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+    radiation surface-to-surface
+boundary hot of c
+    side west
+    held at 30 degC
+    emissivity 0.9
+boundary cold of c
+    side east
+    held at 10 degC
+    emissivity 0.9
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn a_hint_where_no_surface_says() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c  #! radiation-neglected "taken as no surface states one"
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn liquids_are_opaque() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    water
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+    emissivity 0.9
+boundary cold of c
+    side east
+    held at 10 degC
+    emissivity 0.9
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
 }

@@ -1,7 +1,7 @@
 //! `stable-layer`: heat from above, which moves nothing.
 
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
-use crate::checks::look::{celsius, estimate_note, finding_of, gravity_acts, regions};
+use crate::checks::look::{celsius, estimate_note, finding_of, gravity_acts, has_density_maximum, regions};
 use crate::physics::model::ArrangementKind;
 use crate::syntax::{Finding, Level};
 
@@ -27,7 +27,9 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     let mut findings = Vec::new();
     for (region, physics) in regions(subject) {
-        if physics.arrangement.kind != ArrangementKind::StableLayer || region.arrangement.is_some() {
+        let is_stable = physics.arrangement.kind == ArrangementKind::StableLayer;
+        let is_meant = region.arrangement.is_some();
+        if !is_stable || is_meant || has_density_maximum(subject.case, region, physics) {
             continue;
         }
         let ends =
@@ -44,4 +46,113 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         ));
     }
     findings
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn hot_above_cold() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c  #! stable-layer
+    box          1 m by 20 mm
+    filled with  a
+    flow         laminar
+boundary floor of c
+    side bottom
+    held at 10 degC
+boundary lid of c
+    side top
+    held at 30 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 20 mm
+    filled with  a
+    flow         laminar
+boundary floor of c
+    side bottom
+    held at 30 degC
+boundary lid of c
+    side top
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn where_it_is_meant() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 20 mm
+    filled with  a
+    flow         laminar
+    arrangement stable-layer
+boundary floor of c
+    side bottom
+    held at 10 degC
+boundary lid of c
+    side top
+    held at 30 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn no_gravity() {
+        expect_of(
+            CHECK.name,
+            r##"
+case
+    gravity none
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 20 mm
+    filled with  a
+    flow         laminar
+boundary floor of c
+    side bottom
+    held at 10 degC
+boundary lid of c
+    side top
+    held at 30 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
 }

@@ -4,7 +4,8 @@ use crate::checks::look::Weighed;
 use crate::physics::model::RegionPhysics;
 
 /// Brinkman number Br = μ v² / (k ΔT): the heat of friction against the heat that conduction passes. v is the faster of the given
-/// and the buoyant velocity. `NaN` where something is not known.
+/// and the buoyant velocity. `NaN` where something is not known, and
+/// where there is no difference to conduct any heat.
 ///
 /// The buoyant velocity is √(g α ΔT H), and √(Pr) times slower where viscosity holds it back (Pr over 1): the velocity in the layers of
 /// Patterson and Imberger, J. Fluid Mech. 100 (1980) 65. With it Br becomes the dissipation number α g H / cp of Gebhart, J. Fluid Mech.
@@ -12,6 +13,9 @@ use crate::physics::model::RegionPhysics;
 pub fn brinkman_number(physics: &RegionPhysics) -> Weighed {
     let numbers = &physics.numbers;
     let Some(properties) = &numbers.properties else { return Weighed::given(f64::NAN) };
+    if numbers.difference <= 0.0 {
+        return Weighed::given(f64::NAN);
+    }
     let over_speed_squared = properties.viscosity / (properties.conductivity * numbers.difference);
     let buoyant = numbers.buoyant_velocity / numbers.prandtl.sqrt().max(1.0);
     if numbers.given_velocity > buoyant {

@@ -54,3 +54,87 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn a_sliding_plate() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    engine_oil
+    reference    40 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 1 mm
+    filled with  a
+    flow         laminar
+boundary floor of c
+    side bottom
+    held at 39.5 degC
+boundary lid of c
+    side top
+    moves at 0.2 m/s along x
+    held at 40.5 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    engine_oil
+    reference    40 degC at 1 atm
+    density-law  boussinesq
+region c  #! viscous-heating-neglected
+    box          1 m by 1 mm
+    filled with  a
+    flow         laminar
+boundary floor of c
+    side bottom
+    held at 39.5 degC
+boundary lid of c
+    side top
+    moves at 0.4 m/s along x
+    held at 40.5 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn computed() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    engine_oil
+    reference    40 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 1 mm
+    filled with  a
+    flow         laminar
+    viscous-heating on
+boundary floor of c
+    side bottom
+    held at 39.5 degC
+boundary lid of c
+    side top
+    moves at 2 m/s along x
+    held at 40.5 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+}

@@ -48,3 +48,64 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     }
     findings
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn for_nothing() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+    viscous-heating on  #! viscous-heating-negligible "at the buoyant velocity"
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+
+    #[test]
+    fn for_something() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    engine_oil
+    reference    40 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 1 mm
+    filled with  a
+    flow         laminar
+    viscous-heating on
+boundary floor of c
+    side bottom
+    held at 39.5 degC
+boundary lid of c
+    side top
+    moves at 0.4 m/s along x
+    held at 40.5 degC
+boundary rest of c
+    side remaining
+    insulated
+"##,
+        );
+    }
+}

@@ -106,3 +106,89 @@ fn nodes(
             .weighing(ratio.margin("N_needed / N", limit)),
     )
 }
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn coarse_and_fine() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.8 m by 0.8 m by 0.2 m
+    filled with  a
+    flow         turbulent by direct-simulation
+boundary floor of c
+    side bottom
+    held at 30 degC
+boundary lid of c
+    side top
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c  #! direct-simulation-spacing "its smallest scales", direct-simulation-spacing "needs"
+    cells 40 by 40 by 20
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.8 m by 0.8 m by 0.2 m
+    filled with  a
+    flow         turbulent by direct-simulation
+boundary floor of c
+    side bottom
+    held at 30 degC
+boundary lid of c
+    side top
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    cells 200 by 200 by 160
+"##,
+        );
+    }
+
+    #[test]
+    fn models_need_less() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.8 m by 0.8 m by 0.2 m
+    filled with  a
+    flow         turbulent by large-eddy
+boundary floor of c
+    side bottom
+    held at 30 degC
+boundary lid of c
+    side top
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    cells 40 by 40 by 20
+"##,
+        );
+    }
+}

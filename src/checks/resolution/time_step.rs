@@ -3,7 +3,7 @@
 use super::cells::{first_cell, heated_directions, mesh_of, rows, upright};
 use crate::case::model::{Flow, Region, Value};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
-use crate::checks::look::{Weighed, estimate_note, regions};
+use crate::checks::look::{Weighed, estimate_note, regions, rounded_down};
 use crate::physics::model::RegionPhysics;
 use crate::quantity::display::{format_number, format_si};
 use crate::syntax::{Finding, Level};
@@ -93,7 +93,7 @@ fn courant(
     Some(
         Finding::new(CHECK.name, level, step.origin.place, message)
             .about(&*region.name.text)
-            .remedy(format!("a step of {} or less", format_si(step.si / ratio.value * limit, TIME)))
+            .remedy(format!("a step of {} or less", format_si(rounded_down(step.si / ratio.value * limit), TIME)))
             .weighing(ratio.margin("Co / Co_limit", limit)),
     )
 }
@@ -129,8 +129,176 @@ fn diffusion(
             .about(&*region.name.text)
             .remedy(format!(
                 "a step of {} or less, or `time-stepping implicit`",
-                format_si(step.si / ratio.value * limit, TIME)
+                format_si(rounded_down(step.si / ratio.value * limit), TIME)
             ))
             .weighing(ratio.margin("Fo / 0.5", limit)),
     )
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn explicit_steps() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    cells 300 by 300
+    spacing uniform
+initial c
+    temperature 20 degC
+run
+    transient for 1 h step 3 ms  #! time-step "explicit steps take 1"
+    time-stepping explicit
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    cells 300 by 300
+    spacing uniform
+initial c
+    temperature 20 degC
+run
+    transient for 1 h step 2 ms
+    time-stepping explicit
+"##,
+        );
+    }
+
+    #[test]
+    fn implicit_steps() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    cells 300 by 300
+    spacing uniform
+initial c
+    temperature 20 degC
+run
+    transient for 1 h step 30 ms  #! time-step "implicit steps take 10"
+    time-stepping implicit
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          0.3 m by 0.3 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    cells 300 by 300
+    spacing uniform
+initial c
+    temperature 20 degC
+run
+    transient for 1 h step 20 ms
+    time-stepping implicit
+"##,
+        );
+    }
+
+    #[test]
+    fn explicit_diffusion() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    engine_oil
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          10 mm by 10 mm
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    cells 100 by 100
+    spacing uniform
+initial c
+    temperature 20 degC
+run
+    transient for 1 h step 10 us  #! time-step "diffusion number"
+    time-stepping explicit
+"##,
+        );
+    }
 }

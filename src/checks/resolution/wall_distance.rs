@@ -1,11 +1,11 @@
 //! `wall-distance`: a first cell that does not suit the turbulence model.
 
-use super::boundary_layer_cells::WALL_FUNCTIONS;
+use super::boundary_layer_cells::{LARGE_EDDY, WALL_FUNCTIONS};
 use super::cells::{Row, first_cell, heated_directions, mesh_of, rows};
 use super::friction::friction_velocity;
 use crate::case::model::{Flow, Mesh, Region};
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
-use crate::checks::look::{Weighed, regions};
+use crate::checks::look::{Weighed, regions, rounded_down};
 use crate::physics::model::RegionPhysics;
 use crate::quantity::display::{format_number, format_si};
 use crate::syntax::{Finding, Level};
@@ -39,8 +39,8 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
     let mut findings = Vec::new();
     for (region, physics) in regions(subject) {
         let Some(Flow::Turbulent(Some(model))) = region.flow.map(|flow| flow.value) else { continue };
-        // Direct simulation has a check of its own.
-        if model == "direct-simulation" {
+        // Direct simulation has a check of its own, and how large-eddy simulation treats walls is not known here.
+        if matches!(model, "direct-simulation" | LARGE_EDDY) {
             continue;
         }
         if let Some(mesh) = mesh_of(subject.case, region) {
@@ -71,7 +71,7 @@ fn of_mesh(
     } else {
         format!("{} or less", format_number(highest))
     };
-    let cell = |plus: f64| format_si(2.0 * plus * wall_unit, LENGTH);
+    let cell = |plus: f64| format_si(rounded_down(2.0 * plus * wall_unit), LENGTH);
     let remedy = if lowest > 0.0 {
         format!("`first-cell` between {} and {}, or a model carried to the wall", cell(lowest), cell(highest))
     } else {
@@ -106,4 +106,142 @@ fn wall_cell(subject: &Subject<'_>, region: &Region, mesh: &Mesh) -> Option<f64>
 fn one_digit(value: f64) -> String {
     let step = 10_f64.powf(value.log10().floor());
     format_number((value / step).round() * step)
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn carried_to_the_wall() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         turbulent by k-omega
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 12 mm  #! wall-distance "takes 1 or less"
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         turbulent by k-omega
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 1 mm
+"##,
+        );
+    }
+
+    #[test]
+    fn wall_functions() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          3 m by 3 m
+    filled with  a
+    flow         turbulent by k-epsilon
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 2 mm  #! wall-distance "between 30 and 300"
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          3 m by 3 m
+    filled with  a
+    flow         turbulent by k-epsilon
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 50 mm
+"##,
+        );
+    }
+
+    #[test]
+    fn without_a_model() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    air
+    reference    20 degC at 1 atm
+    density-law  boussinesq
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 30 degC
+boundary cold of c
+    side east
+    held at 10 degC
+boundary rest of c
+    side remaining
+    insulated
+mesh of c
+    first-cell 12 mm
+"##,
+        );
+    }
 }

@@ -1,7 +1,7 @@
 //! `wave-period`: a step too long for the waves of a stratified fluid.
 
 use crate::checks::check::{Basis, Check, Family, Subject, Weighing};
-use crate::checks::look::{Weighed, estimate_note, regions};
+use crate::checks::look::{Weighed, estimate_note, regions, rounded_down};
 use crate::quantity::display::{format_number, format_si};
 use crate::syntax::{Finding, Level};
 use crate::vocabulary::statements::TIME;
@@ -41,9 +41,71 @@ fn run(subject: &Subject<'_>, weighing: &Weighing) -> Vec<Finding> {
         findings.push(
             Finding::new(CHECK.name, level, step.origin.place, message)
                 .about(&*region.name.text)
-                .remedy(format!("a step of {} or less", format_si(period * weighing.first_limit(), TIME)))
+                .remedy(format!("a step of {} or less", format_si(rounded_down(period * weighing.first_limit()), TIME)))
                 .weighing(share.margin("Δt N / (2π)", limit)),
         );
     }
     findings
+}
+
+#[cfg(test)]
+mod tests {
+    use super::CHECK;
+    use crate::testing::expect_of;
+
+    #[test]
+    fn steps_in_a_period() {
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    water
+    reference    20 degC at 1 atm
+    density-law  variable
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 25.1 degC
+boundary cold of c
+    side east
+    held at 24.9 degC
+boundary rest of c
+    side remaining
+    insulated
+initial c
+    stratified from 20 degC to 30 degC
+run
+    transient for 1 h step 1 s
+"##,
+        );
+        expect_of(
+            CHECK.name,
+            r##"
+fluid a
+    substance    water
+    reference    20 degC at 1 atm
+    density-law  variable
+region c
+    box          1 m by 1 m
+    filled with  a
+    flow         laminar
+boundary hot of c
+    side west
+    held at 25.1 degC
+boundary cold of c
+    side east
+    held at 24.9 degC
+boundary rest of c
+    side remaining
+    insulated
+initial c
+    stratified from 20 degC to 30 degC
+run
+    transient for 1 h step 5 s  #! wave-period
+"##,
+        );
+    }
 }

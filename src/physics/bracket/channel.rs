@@ -27,7 +27,8 @@ pub fn plates<'a>(question: &Question<'a>, inlet: f64) -> Option<Found<'a>> {
         if condition.is_level() || !is_plate(one.piece.side) {
             // What no correlation for channels covers: as an upright plate in fluid at the inlet's temperature.
             let surface = Surface::Upright(question.placement.run);
-            let at = wall::temperature(question.source, question.gravity, surface, condition, inlet)?;
+            let inside = wall::Inside { surface, gravity: question.gravity, emissivity: 0.0 };
+            let at = wall::temperature(question.source, inside, condition, inlet)?;
             found.set_wall(index, &at, at.band);
             continue;
         }
@@ -39,6 +40,7 @@ pub fn plates<'a>(question: &Question<'a>, inlet: f64) -> Option<Found<'a>> {
             film,
             holds: question.source.holds_at(film),
             converged,
+            has_radiation: false,
         };
         found.set_how(index, edge.0, edge.0, (edge.1.min(edge.2), edge.1.max(edge.2)), how);
     }
@@ -71,4 +73,43 @@ fn upper_edge(question: &Question<'_>, flux: f64, inlet: f64, is_both: bool) -> 
     let fluid = source.at(film);
     let edges = (solved.at, edge_with(&fluid, Edge::Low), edge_with(&fluid, Edge::High));
     Some((edges, chosen(&fluid), film, solved.converged))
+}
+
+#[cfg(test)]
+mod tests {
+    use crate::testing::physics;
+
+    fn channel(west: &str, east: &str) -> crate::physics::model::RegionPhysics {
+        physics(&format!(
+            "case \"t\"\n    ambient 25 degC\nfluid f\n    substance air\n    reference 25 degC\nregion r\n    channel 8 mm by 0.2 m\n    filled with f\n\
+             boundary one of r\n    side west\n    wall\n    {west}\nboundary two of r\n    side east\n    wall\n    {east}\n\
+             boundary ends of r\n    side bottom, top\n    opening\nrun\n    steady\n"
+        ))
+        .remove(0)
+    }
+
+    #[test]
+    fn both_plates_run_hotter_than_one() {
+        let peak = |west: &str, east: &str| channel(west, east).bracket.unwrap().highest.value;
+        let flux = "heated by 150 W/m^2";
+        assert!(peak(flux, flux) > peak(flux, "insulated") + 5.0);
+        assert!(peak("heated by 300 W/m^2", "insulated") > peak(flux, "insulated") + 5.0);
+    }
+
+    #[test]
+    fn the_nusselt_number_carries_the_flux() {
+        let channel = channel("heated by 150 W/m^2", "heated by 150 W/m^2");
+        let passing = channel.numbers.heat_transfer_coefficient * channel.numbers.difference;
+        assert!((passing / 150.0 - 1.0).abs() < 2e-3, "{passing}");
+        let text = channel.bracket.unwrap().highest.estimate.unwrap();
+        assert!(text.contains("Bar-Cohen and Rohsenow"), "{text}");
+    }
+
+    #[test]
+    fn plates_that_are_held() {
+        let channel = channel("held at 60 degC", "held at 60 degC");
+        let bracket = channel.bracket.unwrap();
+        assert!(!bracket.rests_on_estimate() && (bracket.span() - 35.0).abs() < 1e-9);
+        assert!(channel.numbers.nusselt > 0.0 && channel.numbers.nusselt_basis.contains("both plates isothermal"));
+    }
 }

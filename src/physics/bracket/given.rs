@@ -91,3 +91,54 @@ pub fn collect<'a>(question: &Question<'a>, reach: &mut Reach<'a>) -> bool {
     }
     all_known
 }
+
+#[cfg(test)]
+mod tests {
+    use crate::testing::physics;
+
+    fn bracket(boundaries: &str, rest: &str) -> Option<crate::physics::model::Bracket> {
+        let text = format!(
+            "case \"t\"\n    ambient 12 degC\nfluid f\n    substance air\n    reference 20 degC\nregion r\n    box 1 m by 1 m by 1 m\n    filled with f\n{boundaries}{rest}"
+        );
+        physics(&text).remove(0).bracket
+    }
+
+    const WALLS: &str =
+        "boundary w of r\n    side west\n    held at 40 degC\nboundary e of r\n    side east\n    held at 30 degC\n";
+
+    #[test]
+    fn held_walls_are_taken_as_they_stand() {
+        let bracket = bracket(WALLS, "").unwrap();
+        assert!((bracket.highest.value - 313.15).abs() < 1e-9 && (bracket.lowest.value - 303.15).abs() < 1e-9);
+        assert_eq!((bracket.highest.set_by.as_str(), bracket.lowest.set_by.as_str()), ("boundary w", "boundary e"));
+        assert!(bracket.highest.literal.is_some() && bracket.highest.place.is_some() && !bracket.rests_on_estimate());
+    }
+
+    #[test]
+    fn the_start_counts_unless_the_run_is_steady() {
+        let start = "initial r\n    stratified from 5 degC to 50 degC\n";
+        let transient = bracket(WALLS, &format!("{start}run\n    transient for 1 h step 1 s\n")).unwrap();
+        assert!((transient.lowest.value - 278.15).abs() < 1e-9 && (transient.highest.value - 323.15).abs() < 1e-9);
+        assert_eq!(transient.highest.set_by, "the initial temperature");
+        let steady = bracket(WALLS, &format!("{start}run\n    steady\n")).unwrap();
+        assert!((steady.span() - 10.0).abs() < 1e-9, "{steady:?}");
+    }
+
+    #[test]
+    fn openings_let_in_the_ambient_or_what_they_state() {
+        let opening = "boundary door of r\n    side north\n    opening\n";
+        let ambient = bracket(&format!("{WALLS}{opening}"), "").unwrap();
+        assert!((ambient.lowest.value - 285.15).abs() < 1e-9 && ambient.lowest.set_by == "the ambient temperature");
+        let stated = bracket(&format!("{WALLS}{opening}    backflow 2 degC\n"), "").unwrap();
+        assert!((stated.lowest.value - 275.15).abs() < 1e-9 && stated.lowest.set_by == "the backflow at boundary door");
+        let outlet = bracket(&format!("{WALLS}boundary out of r\n    side north\n    outlet\n"), "").unwrap();
+        assert!((outlet.lowest.value - 303.15).abs() < 1e-9, "an outlet lets nothing in: {outlet:?}");
+    }
+
+    #[test]
+    fn nothing_is_said_where_a_temperature_is_unknown() {
+        let broken = "boundary n of r\n    side north\n    held at 20 degC + 1 / 0 * 1 K\n";
+        assert!(bracket(&format!("{WALLS}{broken}"), "").is_none());
+        assert!(bracket("", "").is_none());
+    }
+}

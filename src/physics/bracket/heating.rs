@@ -43,9 +43,9 @@ pub fn transient<'a>(question: &Question<'a>, sizes: &Sizes) -> Option<Found<'a>
                 last + (start - last) * (-duration * conductance.max(0.0) / capacity).exp()
             };
             let end = approach(Edge::Value, settled.bulk);
-            let bulk = |edge| network.bulk(settled.bulk, &settled.fluid, edge).map_or(f64::NAN, |root| root.at);
-            let edges = [approach(Edge::Low, bulk(Edge::Low)), approach(Edge::High, bulk(Edge::High))];
-            (end, (edges[0].min(edges[1]), edges[0].max(edges[1])), settled.converged)
+            let (weak, strong) = network.edges(settled.bulk, &settled.fluid);
+            let (weak, strong) = (approach(Edge::Low, weak), approach(Edge::High, strong));
+            (end, (weak.min(strong), weak.max(strong)), settled.converged)
         }
         None => {
             let heat = network.heat(start, &fluid, Edge::Value);
@@ -63,4 +63,49 @@ pub fn transient<'a>(question: &Question<'a>, sizes: &Sizes) -> Option<Found<'a>
     network.fill(&mut found, start, (start, start));
     network.fill(&mut found, end, band);
     Some(found)
+}
+
+#[cfg(test)]
+mod tests {
+    use crate::testing::physics;
+
+    fn peak(walls: &str, duration: &str) -> f64 {
+        let text = format!(
+            "fluid f\n    substance water\n    reference 20 degC at 1 bar\nregion r\n    box 0.5 m by 0.5 m by 0.4 m\n    filled with f\n\
+             boundary skin of r\n    side remaining\n    wall\n    {walls}\nsource s in r\n    releases 500 W\n\
+             initial r\n    temperature 20 degC\nrun\n    transient for {duration} step 1 s\n"
+        );
+        physics(&text).remove(0).bracket.unwrap().highest.value
+    }
+
+    #[test]
+    fn a_closed_tank_warms_by_the_energy_let_in() {
+        // 0.1 m³ of water at 20 degC, 1 bar: 998.2 kg/m³ and 4185 J/(kg K) (CoolProp 8.0.0): 417.7 kJ/K.
+        let rise = peak("insulated", "2 h") - 293.15;
+        assert!((rise / (500.0 * 7200.0 / 417.7e3) - 1.0).abs() < 1e-3, "{rise}");
+    }
+
+    #[test]
+    fn losses_bound_the_rise() {
+        let (short, longer, longest) = (
+            peak("exchanges 10 W/m^2/K with 20 degC", "10 min"),
+            peak("exchanges 10 W/m^2/K with 20 degC", "10 h"),
+            peak("exchanges 10 W/m^2/K with 20 degC", "2000 h"),
+        );
+        assert!(293.15 < short && short < longer && longer < longest, "{short} {longer} {longest}");
+        // 1.3 m² lose 500 W at 38 K; water inside adds little.
+        assert!((longest - 293.15 - 500.0 / 13.0) < 3.0 && longest - 293.15 > 500.0 / 13.0, "{longest}");
+        let rise = short - 293.15;
+        assert!((rise / (500.0 * 600.0 / 417.7e3) - 1.0).abs() < 0.05, "hardly a loss in 10 min: {rise}");
+    }
+
+    #[test]
+    fn the_start_counts_too() {
+        let text = "fluid f\n    substance water\n    reference 20 degC\nregion r\n    box 0.5 m by 0.5 m by 0.4 m\n    filled with f\n\
+                    boundary skin of r\n    side remaining\n    wall\n    exchanges 10 W/m^2/K with 5 degC\n\
+                    initial r\n    temperature 60 degC\nrun\n    transient for 1 h step 1 s\n";
+        let bracket = physics(text).remove(0).bracket.unwrap();
+        assert!((bracket.highest.value - 333.15).abs() < 1e-9 && bracket.highest.estimate.is_none(), "{bracket:?}");
+        assert!(bracket.lowest.value > 278.15 && bracket.lowest.value < 333.15, "{bracket:?}");
+    }
 }

@@ -22,7 +22,7 @@ use super::fluid_state::Source;
 use super::geometry::Sizes;
 use super::model::{ArrangementKind as Kind, Bracket};
 use super::roles::Role;
-use crate::case::model::{Case, Region};
+use crate::case::model::{Case, Radiation, Region};
 use crate::syntax::Place;
 use reach::{By, Candidate, How, Reach};
 use wall::WallTemperature;
@@ -51,6 +51,26 @@ pub struct Question<'a> {
     pub is_inverted: bool,
 }
 
+/// Emissivity of a wall that states none, where radiation is computed: that of paint and most materials other than bare
+/// metal (common practice).
+pub const USUAL_EMISSIVITY: f64 = 0.9;
+
+impl Question<'_> {
+    /// Whether radiation passes between the walls: the region computes it, and the fluid is no liquid.
+    pub fn has_radiation(&self) -> bool {
+        let is_computed = self.region.radiation.is_some_and(|radiation| radiation.value != Radiation::None);
+        is_computed && self.source.medium.is_none_or(|medium| medium.is_gas())
+    }
+
+    /// Emissivity of a wall towards the others; 0 where no radiation passes.
+    fn emissivity(&self, wall: &Wall<'_>) -> f64 {
+        if !self.has_radiation() {
+            return 0.0;
+        }
+        wall.piece.boundary.emissivity.as_ref().map_or(USUAL_EMISSIVITY, |value| value.si)
+    }
+}
+
 /// Temperatures of a region.
 #[derive(Debug, Default)]
 pub struct Temperatures {
@@ -71,13 +91,14 @@ pub struct Found<'a> {
     candidates: Vec<Candidate<'a>>,
     question_walls: &'a [Wall<'a>],
     region: &'a Region,
+    source: &'a Source<'a>,
     /// How walls and fluid without a correlation of their own were estimated.
     method: &'static str,
     correlation: Option<&'static Correlation>,
     is_inside_range: bool,
     film: f64,
-    holds: bool,
     converged: bool,
+    has_radiation: bool,
 }
 
 impl<'a> Found<'a> {
@@ -88,12 +109,13 @@ impl<'a> Found<'a> {
             candidates: Vec::with_capacity(question.walls.len() + 1),
             question_walls: question.walls,
             region: question.region,
+            source: question.source,
             method: "",
             correlation: None,
             is_inside_range: true,
             film,
-            holds: question.source.holds_at(film),
             converged: true,
+            has_radiation: question.has_radiation(),
         }
     }
 
@@ -103,8 +125,9 @@ impl<'a> Found<'a> {
             correlation: self.correlation,
             is_inside_range: self.is_inside_range,
             film: self.film,
-            holds: self.holds,
+            holds: self.source.holds_at(self.film),
             converged: self.converged,
+            has_radiation: self.has_radiation,
         }
     }
 
@@ -131,8 +154,9 @@ impl<'a> Found<'a> {
             correlation: Some(at.chosen.correlation),
             is_inside_range: at.chosen.estimate.inside_range,
             film: at.film,
-            holds: self.holds,
+            holds: self.source.holds_at(at.film),
             converged: at.converged && self.converged,
+            has_radiation: self.has_radiation,
         };
         self.set_how(index, at.mean, at.extreme, band, how);
     }
@@ -254,7 +278,14 @@ fn body<'a>(question: &Question<'a>) -> Option<Found<'a>> {
         }
         let is_hot = question.placement.roles.get(index) == Some(&Role::Hot);
         let surface = convection::of_body(question.placement, is_hot)?;
-        let at = wall::temperature(question.source, question.gravity, surface, &one.condition, far)?;
+        // Its surroundings are taken at the temperature of the far fluid.
+        let emissivity = question.emissivity(one);
+        let mut condition = one.condition;
+        if emissivity > 0.0 && condition.radiates.is_none() {
+            condition.radiates = Some((emissivity, far));
+        }
+        let inside = wall::Inside { surface, gravity: question.gravity, emissivity: 0.0 };
+        let at = wall::temperature(question.source, inside, &condition, far)?;
         found.set_wall(index, &at, at.band);
     }
     Some(found)

@@ -86,3 +86,40 @@ fn series(a: f64, b: f64) -> f64 {
         a * b / (a + b)
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use crate::testing::physics;
+
+    fn behind(pane: &str, conductivity: &str, outside: &str) -> crate::physics::model::Bracket {
+        let text = format!(
+            "fluid f\n    substance air\n    reference 10 degC\nsolid glass\n    conductivity {conductivity}\n\
+             region pane\n    {pane}\n    made of glass\nregion r\n    gap 50 mm by 1 m by 1 m\n    filled with f\n\
+             boundary out of pane\n    side west\n    {outside}\nboundary back of pane\n    side east\n    meets r\n\
+             boundary cold of r\n    side west\n    meets pane\nboundary hot of r\n    side east\n    wall\n    heated by 100 W/m^2\nrun\n    steady\n"
+        );
+        physics(&text).pop().unwrap().bracket.unwrap()
+    }
+
+    #[test]
+    fn a_slab_adds_its_resistance() {
+        // 100 W/m² through 20 mm of 0.5 W/(m K): 4 K; through 25 W/(m² K): 4 K more.
+        let held = behind("box 20 mm by 1 m by 1 m", "0.5 W/m/K", "held at 0 degC");
+        assert!((held.lowest.value - 277.15).abs() < 1e-6, "{held:?}");
+        let exchanging = behind("box 20 mm by 1 m by 1 m", "0.5 W/m/K", "exchanges 25 W/m^2/K with 0 degC");
+        assert!((exchanging.lowest.value - 281.15).abs() < 1e-6, "{exchanging:?}");
+        assert!(exchanging.lowest.estimate.is_some());
+        assert_eq!(exchanging.lowest.set_by, "boundary cold by the heat that passes through it");
+    }
+
+    #[test]
+    fn a_flux_passes_through() {
+        let text = "fluid f\n    substance air\n    reference 10 degC\nsolid steel\n    conductivity 16 W/m/K\n\
+             region plate1\n    box 20 mm by 1 m by 1 m\n    made of steel\nregion r\n    gap 50 mm by 1 m by 1 m\n    filled with f\n\
+             boundary out of plate1\n    side west\n    heated by 80 W/m^2\nboundary back of plate1\n    side east\n    meets r\n\
+             boundary warm of r\n    side west\n    meets plate1\nboundary cold of r\n    side east\n    wall\n    held at 10 degC\nrun\n    steady\n";
+        let physics = physics(text).pop().unwrap();
+        let passing = physics.numbers.heat_transfer_coefficient * physics.numbers.difference;
+        assert!((passing / 80.0 - 1.0).abs() < 5e-3, "{passing}");
+    }
+}

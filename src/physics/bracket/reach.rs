@@ -66,6 +66,8 @@ pub struct How {
     pub holds: bool,
     /// Whether the solution converged.
     pub converged: bool,
+    /// Whether radiation between walls was counted in.
+    pub has_radiation: bool,
 }
 
 /// The lowest and highest candidates so far.
@@ -144,6 +146,9 @@ impl How {
         let mut text = self.method.to_string();
         if let Some(correlation) = self.correlation {
             text.push_str(&format!(", with the Nusselt number of: {} ({})", correlation.name, correlation.source));
+        }
+        if self.has_radiation {
+            text.push_str(", with radiation between the surfaces (emissivity 0.9 where none is stated)");
         }
         if self.film.is_finite() {
             text.push_str(&format!(", properties at {}", format_si(self.film, TEMPERATURE)));

@@ -55,9 +55,42 @@ pub fn plumes<'a>(question: &Question<'a>, found: &mut Found<'a>, bulk: f64) {
             film: bulk,
             holds: question.source.holds_at(bulk),
             converged: true,
+            has_radiation: false,
         };
         let band = (bulk + excess(gravity.low), bulk + AXIS_OVER_MEAN * excess(gravity.high));
         let place = source.releases.as_ref().map(|value| value.origin.place);
         found.add(bulk + excess(gravity.value), band, By::Plume(&source.name.text), place, how);
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use crate::testing::physics;
+
+    fn room(within: &str) -> crate::physics::model::Bracket {
+        let text = format!(
+            "case \"t\"\n    gravity 9.81 m/s^2\n    ambient 20 degC\nfluid f\n    substance air\n    reference 20 degC\nregion r\n    box 4 m by 4 m by 3 m\n    filled with f\n\
+             boundary door of r\n    side west\n    patch 1 m by 2 m\n    opening\nboundary rest of r\n    side remaining\n    wall\n    insulated\n\
+             source hob in r\n    releases 1 kW\n{within}run\n    steady\n"
+        );
+        physics(&text).remove(0).bracket.unwrap()
+    }
+
+    #[test]
+    fn a_plume_over_a_small_source() {
+        let bracket = room("    within 0.02 m^3\n");
+        assert_eq!(bracket.highest.set_by, "the plume over source hob");
+        // By hand: B = 9.81 · 1000/(1.204 · 1006 · 293.15) = 0.02763 m⁴/s³; Q = 0.1665 · B^(1/3) · 3^(5/3), so
+        // Q = 0.314 m³/s and ΔT = 1000/(1.204 · 1006 · 0.314) = 2.6 K. The constant: (6 · 0.117/5) (9 · 0.117/10)^(1/3) π^(2/3).
+        let excess = bracket.highest.value - 293.15;
+        let constant = 0.1404 * 0.1053_f64.cbrt() * std::f64::consts::PI.powf(2.0 / 3.0);
+        let flow = constant * 0.02763_f64.cbrt() * 3_f64.powf(5.0 / 3.0);
+        assert!((excess / (1000.0 / (1.204 * 1006.0 * flow)) - 1.0).abs() < 0.02, "{excess} {flow}");
+        assert!(bracket.highest.band.1 > 293.15 + 2.0 * excess, "the axis is within the band: {bracket:?}");
+    }
+
+    #[test]
+    fn a_source_that_fills_the_room_sends_up_none() {
+        assert!(room("").highest.value < 293.16);
     }
 }

@@ -54,6 +54,9 @@ fn bracketed(low: (f64, f64), high: (f64, f64), tolerance: f64, function: &mut i
         if least > 0.5 || at_a == 0.0 {
             return Some(Root { at: best, converged: true });
         }
+        if !least.is_finite() {
+            return None;
+        }
         let xi = (a - b) / (c - b);
         let phi = (at_a - at_b) / (at_c - at_b);
         let interpolates = phi * phi < xi && (1.0 - phi) * (1.0 - phi) < 1.0 - xi;
@@ -63,7 +66,7 @@ fn bracketed(low: (f64, f64), high: (f64, f64), tolerance: f64, function: &mut i
         } else {
             0.5
         };
-        share = if share.is_nan() { 0.5 } else { share.clamp(least, 1.0 - least) };
+        share = if share.is_nan() { 0.5 } else { share.max(least).min(1.0 - least) };
     }
     Some(Root { at: if at_a.abs() < at_b.abs() { a } else { b }, converged: false })
 }
@@ -77,9 +80,13 @@ pub fn near(
     tolerance: f64,
     mut function: impl FnMut(f64) -> f64,
 ) -> Option<Root> {
+    // `max` and `min` would turn a guess that is no number into a bound.
+    if !guess.is_finite() {
+        return None;
+    }
     let mut reach = reach.max(tolerance);
-    let mut low = (guess - reach).clamp(least, most);
-    let mut high = (guess + reach).clamp(least, most);
+    let mut low = (guess - reach).max(least).min(most);
+    let mut high = (guess + reach).max(least).min(most);
     let mut at_low = function(low);
     let mut at_high = function(high);
     for _ in 0..STEPS {

@@ -9,7 +9,7 @@
 
 use super::root;
 use super::{Found, Question};
-use crate::physics::conditions::Condition;
+use crate::physics::conditions::{Condition, STEFAN_BOLTZMANN};
 use crate::physics::convection::{Edge, conductance, of_enclosure};
 use crate::physics::correlations::Chosen;
 use crate::physics::fluid_state::Transport;
@@ -45,10 +45,12 @@ pub fn two_sides<'a>(question: &Question<'a>) -> Option<Found<'a>> {
     let cold = sheet(question, Role::Cold)?;
     let guess = 0.5 * (level(&hot).or_else(|| level(&cold))? + level(&cold).or_else(|| level(&hot))?);
     let source = question.source;
-    let mut fluid = source.at(guess);
-    let mut result = solve(question, &hot, &cold, &fluid, Edge::Value)?;
-    let mut converged = source.is_constant();
-    let mut film = 0.5 * (result.0 + result.1);
+    let mut film = guess;
+    let mut fluid = source.at(film);
+    let mut result = solve(question, &hot, &cold, &fluid, film, Edge::Value)?;
+    let has_radiation = question.has_radiation();
+    let mut converged = source.is_constant() && !has_radiation;
+    film = 0.5 * (result.0 + result.1);
     // The film temperature of a cavity moves little with the properties taken at it: repeated substitution settles
     // within a few passes, and is halved where it should swing.
     for pass in 0..12 {
@@ -56,14 +58,14 @@ pub fn two_sides<'a>(question: &Question<'a>) -> Option<Found<'a>> {
             break;
         }
         fluid = source.at(film);
-        result = solve(question, &hot, &cold, &fluid, Edge::Value)?;
+        result = solve(question, &hot, &cold, &fluid, film, Edge::Value)?;
         let next = 0.5 * (result.0 + result.1);
         converged = (next - film).abs() < 0.02;
         film = if pass < 4 { next } else { 0.5 * (next + film) };
     }
     let (hot_temperature, cold_temperature, chosen) = result;
-    let weak = solve(question, &hot, &cold, &fluid, Edge::Low);
-    let strong = solve(question, &hot, &cold, &fluid, Edge::High);
+    let weak = solve(question, &hot, &cold, &fluid, film, Edge::Low);
+    let strong = solve(question, &hot, &cold, &fluid, film, Edge::High);
     let band = |pick: fn(&(f64, f64, Chosen)) -> f64| {
         let edges = [weak.as_ref().map_or(f64::NAN, pick), strong.as_ref().map_or(f64::NAN, pick)];
         (edges[0].min(edges[1]), edges[0].max(edges[1]))
@@ -94,12 +96,25 @@ fn level(sheet: &Sheet<'_>) -> Option<f64> {
     sheet.condition.anchor()
 }
 
+/// Share of black-body exchange between two sides that face each other, on the smaller one's area: 1/(1/εi + (Ai/Ao)(1/εo − 1))
+/// (Christiansen, Ann. Phys. Chem. 255 (1883) 267-283; recalled; parallel plates for equal areas). 0 without radiation.
+fn radiative_exchange(question: &Question<'_>, hot: &Sheet<'_>, cold: &Sheet<'_>) -> f64 {
+    let emissivity = |sheet: &Sheet<'_>| question.walls.get(sheet.wall).map_or(0.0, |wall| question.emissivity(wall));
+    let (inner, outer) = if hot.area < cold.area { (hot, cold) } else { (cold, hot) };
+    let (of_inner, of_outer) = (emissivity(inner), emissivity(outer));
+    if of_inner <= 0.0 || of_outer <= 0.0 {
+        return 0.0;
+    }
+    1.0 / (1.0 / of_inner + inner.area / outer.area * (1.0 / of_outer - 1.0))
+}
+
 /// Hot and cold temperature and the correlation, with fixed properties.
 fn solve(
     question: &Question<'_>,
     hot: &Sheet<'_>,
     cold: &Sheet<'_>,
     fluid: &Transport,
+    film: f64,
     edge: Edge,
 ) -> Option<(f64, f64, Chosen)> {
     let placement = question.placement;
@@ -109,9 +124,12 @@ fn solve(
     };
     // By the inner face of an annulus; for flat sides both are alike.
     let area = if hot.area < cold.area { hot.area } else { cold.area };
+    let exchange = radiative_exchange(question, hot, cold);
     let passing = |difference: f64| {
+        let (warm, cool) = (film + 0.5 * difference, film - 0.5 * difference);
+        let radiated = area * exchange * STEFAN_BOLTZMANN * (warm * warm + cool * cool) * 2.0 * film * difference;
         chosen(difference).map_or(f64::NAN, |chosen| {
-            conductance(placement, area, fluid.conductivity, edge.of(&chosen.estimate)) * difference
+            conductance(placement, area, fluid.conductivity, edge.of(&chosen.estimate)) * difference + radiated
         })
     };
     let carries = |heat: f64| {
@@ -153,4 +171,83 @@ fn solve(
     };
     let chosen = chosen(hot_temperature - cold_temperature)?;
     (hot_temperature.is_finite() && cold_temperature.is_finite()).then_some((hot_temperature, cold_temperature, chosen))
+}
+
+#[cfg(test)]
+mod tests {
+    use crate::testing::physics;
+
+    fn cavity(hot: &str, cold: &str, run: &str) -> crate::physics::model::RegionPhysics {
+        physics(&format!(
+            "fluid f\n    substance air\n    reference 20 degC\nregion r\n    box 0.1 m by 1 m by 0.8 m\n    filled with f\n\
+             boundary hot of r\n    side west\n    wall\n    {hot}\nboundary cold of r\n    side east\n    wall\n    {cold}\n\
+             boundary rest of r\n    side remaining\n    wall\n    insulated\nrun\n    {run}\n"
+        ))
+        .remove(0)
+    }
+
+    #[test]
+    fn one_heat_passes_every_resistance() {
+        let cavity = cavity("exchanges 8 W/m^2/K with 60 degC", "exchanges 20 W/m^2/K with -10 degC", "steady");
+        let bracket = cavity.bracket.unwrap();
+        let (hot, cold) = (bracket.highest.value, bracket.lowest.value);
+        let from_hot = 8.0 * (333.15 - hot);
+        let to_cold = 20.0 * (cold - 263.15);
+        let between = cavity.numbers.heat_transfer_coefficient * (hot - cold);
+        assert!((from_hot / to_cold - 1.0).abs() < 1e-4, "{from_hot} {to_cold}");
+        assert!((from_hot / between - 1.0).abs() < 2e-3, "{from_hot} {between}");
+        assert!(bracket.highest.estimate.unwrap().contains("Berkovsky and Polevikov"));
+    }
+
+    #[test]
+    fn a_flux_sets_the_difference_from_the_cold_side() {
+        let cavity = cavity("heated by 100 W/m^2", "exchanges 10 W/m^2/K with 20 degC", "steady");
+        let bracket = cavity.bracket.unwrap();
+        assert!((bracket.lowest.value - 303.15).abs() < 1e-6, "{bracket:?}");
+        assert_eq!(bracket.lowest.band, (bracket.lowest.value, bracket.lowest.value));
+        let passing = cavity.numbers.heat_transfer_coefficient * cavity.numbers.difference;
+        assert!((passing / 100.0 - 1.0).abs() < 2e-3, "{passing}");
+    }
+
+    #[test]
+    fn a_cooling_flux_below_a_held_side() {
+        let cavity = cavity("held at 40 degC", "cooled by 50 W/m^2", "steady");
+        let bracket = cavity.bracket.unwrap();
+        assert!((bracket.highest.value - 313.15).abs() < 1e-9 && bracket.highest.estimate.is_none());
+        let passing = cavity.numbers.heat_transfer_coefficient * cavity.numbers.difference;
+        assert!((passing / 50.0 - 1.0).abs() < 2e-3, "{passing}");
+    }
+
+    #[test]
+    fn two_fluxes_leave_the_level_open() {
+        assert!(cavity("heated by 50 W/m^2", "cooled by 50 W/m^2", "steady").bracket.is_none());
+    }
+
+    #[test]
+    fn radiation_between_the_sides_counts_where_it_is_computed() {
+        let cavity = |radiation: &str| {
+            physics(&format!(
+                "fluid f\n    substance air\n    reference 20 degC\nregion r\n    box 0.1 m by 1 m by 0.8 m\n    filled with f\n    {radiation}\n\
+                 boundary hot of r\n    side west\n    wall\n    heated by 200 W/m^2\n    emissivity 0.8\n\
+                 boundary cold of r\n    side east\n    wall\n    held at 20 degC\n    emissivity 0.6\nrun\n    steady\n"
+            ))
+            .remove(0)
+        };
+        let (with, without) = (cavity("radiation surface-to-surface"), cavity("radiation none"));
+        let hot = with.bracket.as_ref().unwrap().highest.value;
+        assert!(hot < without.bracket.unwrap().highest.value - 20.0);
+        // Parallel plates: σ (T⁴ − T⁴) / (1/0.8 + 1/0.6 − 1).
+        let radiated = 5.670_374_419e-8 * (hot.powi(4) - 293.15_f64.powi(4)) / (1.0 / 0.8 + 1.0 / 0.6 - 1.0);
+        let convected = with.numbers.heat_transfer_coefficient * (hot - 293.15);
+        assert!(((radiated + convected) / 200.0 - 1.0).abs() < 2e-3, "{radiated} {convected}");
+        assert!(with.bracket.unwrap().highest.estimate.unwrap().contains("with radiation between the surfaces"));
+    }
+
+    #[test]
+    fn a_cold_side_that_radiates() {
+        let cavity = cavity("heated by 100 W/m^2", "radiates to 0 degC\n    emissivity 0.5", "steady");
+        let cold = cavity.bracket.unwrap().lowest.value;
+        let lost = 0.5 * 5.670_374_419e-8 * (cold.powi(4) - 273.15_f64.powi(4));
+        assert!((lost / 100.0 - 1.0).abs() < 1e-6, "{lost}");
+    }
 }

@@ -40,3 +40,29 @@ pub fn inflow(question: &Question<'_>) -> Option<(f64, f64)> {
 pub fn is_free(boundary: &Boundary) -> bool {
     boundary.enters.is_none() && crate::physics::conditions::is_open(boundary)
 }
+
+#[cfg(test)]
+mod tests {
+    use crate::testing::physics;
+
+    fn room(rate: &str) -> f64 {
+        let text = format!(
+            "fluid f\n    substance air\n    reference 20 degC at 1 bar\nregion r\n    box 4 m by 5 m by 3 m\n    filled with f\n\
+             boundary supply of r\n    side west\n    patch 0.5 m by 0.2 m\n    inlet\n    enters at {rate}\n    carries 16 degC\n\
+             boundary exhaust of r\n    side east\n    patch 0.5 m by 0.2 m\n    outlet\n\
+             boundary rest of r\n    side remaining\n    wall\n    insulated\nsource load in r\n    releases 600 W\nrun\n    steady\n"
+        );
+        physics(&text).remove(0).bracket.unwrap().highest.value
+    }
+
+    #[test]
+    fn what_leaves_carries_the_load() {
+        // Air at 16 degC and 1 bar: 1.2053 kg/m³, 1006 J/(kg K) (CoolProp 8.0.0).
+        let expected = 289.15 + 600.0 / (0.05 * 1.2053 * 1006.0);
+        let by_volume = room("0.05 m^3/s");
+        assert!((by_volume - expected).abs() < 0.05, "{by_volume} {expected}");
+        assert!((room("0.5 m/s") - by_volume).abs() < 1e-3);
+        assert!((room("0.060265 kg/s") - by_volume).abs() < 0.05);
+        assert!((room("180 m^3/h") - by_volume).abs() < 1e-6);
+    }
+}

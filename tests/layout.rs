@@ -1,8 +1,13 @@
 //! The layout of decks: the sample of the language, and what holds for every text.
 
-use super::*;
-use crate::syntax::tokens::{TokenKind, tokens};
-use crate::workspace::analyse_text;
+#![allow(clippy::unwrap_used, clippy::expect_used, clippy::panic)]
+
+use deckline::syntax::layout::laid_out;
+use deckline::syntax::parse;
+use deckline::syntax::tokens::{TokenKind, tokens};
+use deckline::testing::TODAY;
+use deckline::workspace::{analyse_text, walk};
+use std::path::Path;
 
 /// The tokens of a text without white space, entry by entry.
 fn without_white_space(text: &str) -> Vec<(TokenKind, String)> {
@@ -32,7 +37,7 @@ fn without_white_space(text: &str) -> Vec<(TokenKind, String)> {
 /// What is found, without places.
 fn found(text: &str) -> Vec<String> {
     let strip = |text: &str| text.chars().filter(|c| !c.is_whitespace()).collect::<String>();
-    let mut all: Vec<String> = analyse_text(text, crate::testing::TODAY)
+    let mut all: Vec<String> = analyse_text(text, TODAY)
         .findings
         .iter()
         .map(|finding| format!("{} {:?} {}", finding.check, finding.level, strip(&finding.message)))
@@ -52,14 +57,14 @@ fn holds(text: &str) {
 
 #[test]
 fn the_sample_of_the_language_stands_as_it_is_and_comes_back_when_squeezed() {
-    let sample = include_str!("layout_sample.buoy");
+    let sample = include_str!("layout/sample.buoy");
     assert_eq!(laid_out(sample), sample);
     let squeezed: String = sample
         .lines()
         .map(|line| {
             let indent = if line.starts_with(' ') && !line.trim_start().starts_with("because") { " " } else { "" };
             let indent = if line.trim_start().starts_with("because") { "\t" } else { indent };
-            format!("{indent}{}\n", gathered(line.trim()))
+            format!("{indent}{}\n", line.split_whitespace().collect::<Vec<_>>().join(" "))
         })
         .collect();
     assert_eq!(laid_out(&squeezed), sample);
@@ -183,7 +188,7 @@ fn for_any_text_only_white_space_changes() {
         "difference",
     ];
     let mut random = Random(0x9E37_79B9_7F4A_7C15);
-    for _ in 0..4000 {
+    for _ in 0..1500 {
         let mut text = String::new();
         for _ in 0..=random.below(40) {
             text.push_str(PIECES[random.below(PIECES.len())]);
@@ -194,7 +199,13 @@ fn for_any_text_only_white_space_changes() {
 
 #[test]
 fn the_decks_of_the_project_keep_their_meaning() {
-    for (_, text) in crate::substances::library::FILES {
+    for (_, text) in deckline::substances::library::FILES {
         holds(text);
+    }
+    let folder = Path::new(env!("CARGO_MANIFEST_DIR")).join("tests");
+    let (decks, _) = walk::decks(&[folder.join("decks"), folder.join("published")]);
+    assert!(decks.len() > 50);
+    for path in decks {
+        holds(&std::fs::read_to_string(path).expect("a deck"));
     }
 }
