@@ -76,6 +76,17 @@ EDITORS = ["visual-studio-code", "neovim", "emacs"]
     params=EDITORS,
 )
 async def client(lsp_client: LanguageClient, request, folder):
+    lsp_client.registered = []
+
+    # What the library says that these editors can, and does not do itself.
+    @lsp_client.feature(types.CLIENT_REGISTER_CAPABILITY)
+    def _(params: types.RegistrationParams):
+        lsp_client.registered += [one.method for one in params.registrations]
+
+    @lsp_client.feature(types.WORKSPACE_INLAY_HINT_REFRESH)
+    def _(_):
+        pass
+
     result = await lsp_client.initialize_session(
         types.InitializeParams(
             capabilities=client_capabilities(request.param),
@@ -118,7 +129,7 @@ async def findings(client, folder, name="cabinet.buoy"):
         report = await client.text_document_diagnostic_async(types.DocumentDiagnosticParams(document(folder, name)))
         return report.items
     while document(folder, name).uri not in client.diagnostics:
-        await asyncio.wait_for(client.wait_for_notification_async(types.TEXT_DOCUMENT_PUBLISH_DIAGNOSTICS), 10)
+        await asyncio.wait_for(client.wait_for_notification(types.TEXT_DOCUMENT_PUBLISH_DIAGNOSTICS), 10)
     return client.diagnostics[document(folder, name).uri]
 
 
