@@ -5,7 +5,7 @@
 pub enum Compiled {
     /// A number.
     Constant(f64),
-    /// What [`Slots`] holds at an index.
+    /// What the expression depends on.
     Variable(Variable),
     /// `-a`
     Negative(Box<Compiled>),

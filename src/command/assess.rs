@@ -60,7 +60,7 @@ pub struct Arguments {
 pub enum Form {
     /// For a person at a terminal
     Cards,
-    /// One line a finding: file:line:column: level: text [check]
+    /// One line a finding: `file:line:column: level: text [check]`
     Lines,
     /// For a program; --schema prints the schema
     Json,
