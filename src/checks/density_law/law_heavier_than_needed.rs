@@ -75,7 +75,10 @@ fn finding(subject: &Subject<'_>, region: &Assessed<'_>, level: Level) -> Option
     edits.extend(
         remedy::move_reference(region.fluid, middle, false).filter(|_| is_off).into_iter().flat_map(|fix| fix.edits),
     );
-    finding.fixes.push(Fix { title, edits, sure });
+    // The Boussinesq law needs a reference; where none is stated, the words say which, and no single change is enough.
+    if region.fluid.reference_temperature.is_some() {
+        finding.fixes.push(Fix { title, edits, sure });
+    }
     Some(finding)
 }
 
